@@ -1,0 +1,119 @@
+import { z } from 'zod';
+
+import { amount, defineKind } from './kind.ts';
+
+export const LOAD_SYMBOLS = [
+  'plain',
+  'motor',
+  'pump',
+  'lamp',
+  'heater',
+  'horn',
+  'socket',
+  'radio',
+  'instrument',
+  'fridge',
+] as const;
+
+const LETTERS: Readonly<Record<string, string>> = {
+  motor: 'M',
+  pump: 'M',
+  horn: 'P',
+  radio: 'P',
+  instrument: 'P',
+  socket: 'X',
+};
+
+export const load = defineKind({
+  kind: 'load',
+  title: 'Load',
+  drawer: 'Use',
+  letter: (symbol) => LETTERS[symbol ?? 'plain'] ?? 'E',
+  ratings: z.strictObject({
+    nominalV: amount,
+    ratedA: amount.optional(),
+    ratedW: amount.optional(),
+    minV: amount.optional(),
+    maxV: amount.optional(),
+    model: z.enum(['current', 'power', 'resistance']).optional(),
+    dropClass: z.enum(['general', 'critical']).optional(),
+    hoursPerDay: amount.optional(),
+    demand: z.enum(['continuous', 'intermittent', 'momentary']).optional(),
+    onMinutes: amount.optional(),
+    duty: z.enum(['bilge', 'navLight', 'blower', 'thruster', 'windlass', 'alarm', 'memory']).optional(),
+    lockedRotorA: amount.optional(),
+    thermallyProtected: z.boolean().optional(),
+    essential: z.boolean().optional(),
+  }),
+  symbols: LOAD_SYMBOLS as readonly [string, ...string[]],
+  offers: [
+    { partId: 'load-plain', title: 'DC load', symbol: 'plain', ratings: { nominalV: 12, ratedA: 5 } },
+    {
+      partId: 'load-motor',
+      title: 'Motor',
+      symbol: 'motor',
+      ratings: { nominalV: 12, ratedA: 20, demand: 'intermittent' },
+    },
+    {
+      partId: 'load-windlass',
+      title: 'Windlass, 1,000 W',
+      symbol: 'motor',
+      ratings: { nominalV: 12, ratedW: 1000, demand: 'momentary', onMinutes: 5, duty: 'windlass' },
+    },
+    {
+      partId: 'load-bilge-pump',
+      title: 'Bilge pump',
+      symbol: 'pump',
+      ratings: { nominalV: 12, ratedA: 5, duty: 'bilge' },
+    },
+    {
+      partId: 'load-pump',
+      title: 'Pump',
+      symbol: 'pump',
+      ratings: { nominalV: 12, ratedA: 7, demand: 'intermittent' },
+    },
+    {
+      partId: 'load-nav-light',
+      title: 'Navigation light',
+      symbol: 'lamp',
+      ratings: { nominalV: 12, ratedA: 0.8, duty: 'navLight' },
+    },
+    { partId: 'load-lamp', title: 'Lamp', symbol: 'lamp', ratings: { nominalV: 12, ratedA: 1 } },
+    {
+      partId: 'load-heater',
+      title: 'Heater',
+      symbol: 'heater',
+      ratings: { nominalV: 12, ratedW: 200, model: 'resistance' },
+    },
+    {
+      partId: 'load-horn',
+      title: 'Horn',
+      symbol: 'horn',
+      ratings: { nominalV: 12, ratedA: 5, demand: 'intermittent' },
+    },
+    {
+      partId: 'load-socket',
+      title: 'Socket',
+      symbol: 'socket',
+      ratings: { nominalV: 12, ratedA: 10, demand: 'intermittent' },
+    },
+    {
+      partId: 'load-radio',
+      title: 'Radio',
+      symbol: 'radio',
+      ratings: { nominalV: 12, ratedA: 6, dropClass: 'critical', demand: 'intermittent' },
+    },
+    {
+      partId: 'load-instrument',
+      title: 'Instrument',
+      symbol: 'instrument',
+      ratings: { nominalV: 12, ratedA: 1, dropClass: 'critical' },
+    },
+    { partId: 'load-fridge', title: 'Refrigerator', symbol: 'fridge', ratings: { nominalV: 12, ratedA: 5 } },
+  ],
+  terminals: () => [
+    { name: 'pos', role: 'dc+', x: 2, y: 0 },
+    { name: 'neg', role: 'dc-', x: 2, y: 6 },
+  ],
+  size: () => ({ width: 4, height: 6 }),
+});
