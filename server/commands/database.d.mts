@@ -10,6 +10,9 @@ export interface RunningDatabase {
   readonly pid: number;
   /** True where this call made the data folder. */
   readonly made: boolean;
+  /** True from the making of the data folder until `markUsed` is called: whatever stands in it is of no value yet. */
+  readonly fresh: boolean;
+  readonly markUsed: () => void;
   /** True where it ran already. */
   readonly shared: boolean;
   /** Lets go of it; the last one to do so ends it. */

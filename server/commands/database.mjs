@@ -38,6 +38,8 @@ export async function startDatabase({ folder: path, say = () => {}, durable = tr
     ...instance,
     url: urlOf(instance, NAME),
     urlOf: (name) => urlOf(instance, name),
+    fresh: existsSync(join(folder, 'fresh.json')),
+    markUsed: () => rmSync(join(folder, 'fresh.json'), { force: true }),
     stop: () => whileAlone(folder, () => leave(folder, user)),
   };
 }
@@ -175,6 +177,7 @@ async function install(folder, say) {
   });
   closeSync(log);
   if (code !== 0) throw refusal(folder, lastWords(folder));
+  writeKept(join(folder, 'fresh.json'), { fresh: true }); // before the folder counts as made, so that no death can fall between
   renameSync(half, join(folder, 'data'));
 }
 

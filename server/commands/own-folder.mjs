@@ -14,6 +14,8 @@ import { join, resolve } from 'node:path';
 
 import { Stopped } from './stopped.mjs';
 
+const LONGEST_WAIT_MS = 600_000;
+
 /** Makes the folder if need be and answers its real path, readable by its owner only. */
 export function openFolder(path) {
   const folder = resolve(path);
@@ -72,9 +74,9 @@ export function requireSpace(folder, megabytes) {
  * Does the work while no other process does work on the same folder. The lock is an abstract socket: the kernel lets
  * go of it when its holder dies, however it dies, so there is never a stale one.
  */
-export async function whileAlone(folder, work) {
+export async function whileAlone(folder, work, sayWaiting = () => {}) {
   const name = `\0ampwright-${createHash('sha256').update(folder).digest('hex').slice(0, 40)}`;
-  const lock = await takeLock(name, Date.now() + 180_000, folder);
+  const lock = await takeLock(name, folder, sayWaiting);
   try {
     return await work();
   } finally {
@@ -82,12 +84,14 @@ export async function whileAlone(folder, work) {
   }
 }
 
-async function takeLock(name, deadline, folder) {
-  for (;;) {
+async function takeLock(name, folder, sayWaiting) {
+  for (const start = Date.now(); ;) {
     const lock = await tryListen({ path: name });
     if (lock !== undefined) return lock;
-    if (Date.now() > deadline) {
-      throw new Stopped(`Another command of Ampwright has been busy with ${folder} for three minutes. End it first.`);
+    sayWaiting();
+    sayWaiting = () => {};
+    if (Date.now() - start > LONGEST_WAIT_MS) {
+      throw new Stopped(`Another command of Ampwright has been busy with ${folder} for ten minutes. End it first.`);
     }
     await pause(50);
   }
