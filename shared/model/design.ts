@@ -198,7 +198,7 @@ export const Run = z
     mark: z.string().optional(),
     from: End,
     to: End,
-    lengthM: notNegative.optional(),
+    lengthM: z.number().min(0, 'must be greater than 0').optional(),
     conductor: Conductor,
     milliohm: notNegative.optional(),
     link: z.boolean().optional(),

@@ -52,15 +52,15 @@ export function invertPatches(before: object, patches: readonly Patch[]): Patch[
   return inverse;
 }
 
-/** Undoes to the shallowest place that was missing, so that no empty branch is left behind. */
+/** Undoes at the shallowest place that was missing or was no branch, so that nothing is left behind or lost. */
 function invertOne(before: Branch, patch: Patch): Patch {
   let at: unknown = before;
   for (let depth = 0; depth < patch.path.length; depth++) {
-    const key = patch.path[depth]!;
-    if (typeof at !== 'object' || at === null || !Object.hasOwn(at, key)) {
-      return { op: 'remove', path: patch.path.slice(0, depth + 1) };
+    if (typeof at !== 'object' || at === null || Array.isArray(at)) {
+      return { op: 'set', path: patch.path.slice(0, depth), value: at };
     }
-    at = (at as Branch)[key];
+    if (!Object.hasOwn(at, patch.path[depth]!)) return { op: 'remove', path: patch.path.slice(0, depth + 1) };
+    at = (at as Branch)[patch.path[depth]!];
   }
   return { op: 'set', path: patch.path, value: at };
 }
