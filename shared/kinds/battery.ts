@@ -1,36 +1,36 @@
 import { z } from 'zod';
 
-import { amount, count, defineKind } from './kind.ts';
+import { CHEMISTRIES, type Chemistry } from './chemistry.ts';
+import { amount, count, defineKind, readRatings } from './kind.ts';
 
-export const CHEMISTRIES = ['flooded', 'agm', 'gel', 'lifepo4'] as const;
-export type Chemistry = (typeof CHEMISTRIES)[number];
+const ratings = z.strictObject({
+  chemistry: z.enum(CHEMISTRIES),
+  nominalV: amount,
+  capacityAh: amount,
+  internalMilliohm: amount.optional(),
+  emfV: amount.optional(),
+  ccaA: amount.optional(),
+  shortCircuitA: amount.optional(),
+  maxDischargeA: amount.optional(),
+  maxChargeA: amount.optional(),
+  chargeV: amount.optional(),
+  floatV: amount.optional(),
+  equaliseV: amount.optional(),
+  usableFraction: amount.optional(),
+  peukert: amount.optional(),
+  managed: z.boolean().optional(),
+  maxSeries: count(1, 99).optional(),
+  maxParallel: count(1, 99).optional(),
+  lowTempCutoff: z.boolean().optional(),
+  preAlarm: z.boolean().optional(),
+});
 
 export const battery = defineKind({
   kind: 'battery',
   title: 'Battery',
   drawer: 'Store',
   letter: () => 'G',
-  ratings: z.strictObject({
-    chemistry: z.enum(CHEMISTRIES),
-    nominalV: amount,
-    capacityAh: amount,
-    internalMilliohm: amount.optional(),
-    emfV: amount.optional(),
-    ccaA: amount.optional(),
-    shortCircuitA: amount.optional(),
-    maxDischargeA: amount.optional(),
-    maxChargeA: amount.optional(),
-    chargeV: amount.optional(),
-    floatV: amount.optional(),
-    equaliseV: amount.optional(),
-    usableFraction: amount.optional(),
-    peukert: amount.optional(),
-    managed: z.boolean().optional(),
-    maxSeries: count(1, 99).optional(),
-    maxParallel: count(1, 99).optional(),
-    lowTempCutoff: z.boolean().optional(),
-    preAlarm: z.boolean().optional(),
-  }),
+  ratings,
   symbols: ['cells', 'block'],
   offers: [
     {
@@ -83,4 +83,22 @@ export const battery = defineKind({
     { name: 'sense', role: 'signal', x: 0, y: 4, optional: true },
   ],
   size: () => ({ width: 4, height: 6 }),
+  defaults: (device) => {
+    const { chemistry = 'flooded' } = readRatings(ratings, device);
+    return { ...BY_CHEMISTRY[chemistry], managed: false, lowTempCutoff: false, preAlarm: false };
+  },
+  network: (device, { state }) => {
+    const { chemistry, nominalV, capacityAh, emfV, internalMilliohm, shortCircuitA } = readRatings(ratings, device);
+    if (chemistry === undefined || nominalV === undefined || capacityAh === undefined) return [];
+    const facts = { chemistry, nominalV, capacityAh, emfV, internalMilliohm, shortCircuitA, soc: state.soc };
+    return [{ type: 'battery', pos: 'pos', neg: 'neg', ...facts }];
+  },
 });
+
+/** Usual design figures, from memory; a battery's own data governs. EMF and resistance are in the tables. */
+const BY_CHEMISTRY: Readonly<Record<Chemistry, { readonly usableFraction: number; readonly peukert: number }>> = {
+  flooded: { usableFraction: 0.5, peukert: 1.25 },
+  agm: { usableFraction: 0.5, peukert: 1.1 },
+  gel: { usableFraction: 0.5, peukert: 1.15 },
+  lifepo4: { usableFraction: 0.8, peukert: 1.03 },
+};

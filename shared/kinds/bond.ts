@@ -35,4 +35,11 @@ export const bond = defineKind({
     }));
   },
   size: (device) => ({ width: barWidth(readRatings(ratings, device).ways ?? 4), height: 4 }),
+  defaults: () => ({ role: 'common', ways: 4 }),
+  network: (device) => [
+    {
+      type: 'join',
+      terminals: Array.from({ length: readRatings(ratings, device).ways ?? 4 }, (_, i) => String(i + 1)),
+    },
+  ],
 });

@@ -2,8 +2,9 @@ import { z } from 'zod';
 
 import { EntityId } from '#shared/model/design.ts';
 
+import { protectionOhm } from './element.ts';
 import { amount, count, defineKind, readRatings } from './kind.ts';
-import { poleTerminals } from './poles.ts';
+import { poleNames, poleTerminals } from './poles.ts';
 
 const ratings = z.strictObject({
   ratedA: amount,
@@ -34,4 +35,16 @@ export const breaker = defineKind({
   ],
   terminals: (device) => poleTerminals(readRatings(ratings, device).poles ?? 1),
   size: (device) => ({ width: 6, height: 2 * (readRatings(ratings, device).poles ?? 1) }),
+  defaults: () => ({ poles: 1, main: false }),
+  // The trip coil and contacts of a pole, taken like a fuse: from memory, small breakers drop about that at their rating.
+  network: (device, { state }) => {
+    const { ratedA, poles = 1 } = readRatings(ratings, device);
+    const pole = {
+      ohm: protectionOhm(ratedA),
+      closed: state.closed ?? state.on ?? true,
+      closable: true,
+      protective: true,
+    };
+    return poleNames(poles).map(({ a, b }) => ({ type: 'contact', a, b, ...pole }));
+  },
 });

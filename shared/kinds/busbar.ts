@@ -45,4 +45,11 @@ export const busbar = defineKind({
     return rowOfTerminals(studs ?? 10, pitchOf(device), 1, role ?? 'dc+');
   },
   size: (device) => ({ width: ((readRatings(ratings, device).studs ?? 10) - 1) * pitchOf(device) + 2, height: 2 }),
+  defaults: () => ({ studs: 10, role: 'dc+' }),
+  network: (device) => [
+    {
+      type: 'join',
+      terminals: Array.from({ length: readRatings(ratings, device).studs ?? 10 }, (_, i) => String(i + 1)),
+    },
+  ],
 });

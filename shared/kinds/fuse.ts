@@ -2,24 +2,27 @@ import { z } from 'zod';
 
 import { EntityId } from '#shared/model/design.ts';
 
-import { amount, defineKind } from './kind.ts';
+import { protectionOhm } from './element.ts';
+import { amount, defineKind, readRatings } from './kind.ts';
 
 /** Families that the particulars offer; any other text is allowed (domain.md). */
 export const FUSE_FAMILIES = ['class T', 'class J', 'terminal', 'bolt-down', 'blade', 'glass', 'gG'] as const;
+
+const ratings = z.strictObject({
+  ratedA: amount,
+  interruptA: amount.optional(),
+  maxV: amount.optional(),
+  family: z.string().optional(),
+  coldMilliohm: amount.optional(),
+  backedUpBy: EntityId.optional(),
+});
 
 export const fuse = defineKind({
   kind: 'fuse',
   title: 'Fuse',
   drawer: 'Protect',
   letter: () => 'F',
-  ratings: z.strictObject({
-    ratedA: amount,
-    interruptA: amount.optional(),
-    maxV: amount.optional(),
-    family: z.string().optional(),
-    coldMilliohm: amount.optional(),
-    backedUpBy: EntityId.optional(),
-  }),
+  ratings,
   symbols: ['fuse', 'class-t', 'stud'],
   offers: [
     {
@@ -50,4 +53,14 @@ export const fuse = defineKind({
     { name: 'b', role: 'any', x: 6, y: 1 },
   ],
   size: () => ({ width: 6, height: 2 }),
+  defaults: (device) => {
+    const { ratedA } = readRatings(ratings, device);
+    return { coldMilliohm: protectionOhm(ratedA) * 1000 };
+  },
+  network: (device, { state }) => {
+    const { ratedA, coldMilliohm } = readRatings(ratings, device);
+    const ohm = coldMilliohm !== undefined && coldMilliohm >= 0 ? coldMilliohm / 1000 : protectionOhm(ratedA);
+    const closed = state.closed ?? true;
+    return [{ type: 'contact', a: 'a', b: 'b', ohm, closed, closable: true, protective: true }];
+  },
 });

@@ -2,6 +2,8 @@ import { z } from 'zod';
 
 import type { Device } from '#shared/model/design.ts';
 
+import type { Condition, Element } from './element.ts';
+
 /** The drawers of the locker: places in the system, from store to watch. */
 export const DRAWERS = ['Store', 'Charge', 'Protect', 'Switch', 'Join', 'Convert', 'Use', 'Shore', 'Watch'] as const;
 export type Drawer = (typeof DRAWERS)[number];
@@ -44,6 +46,13 @@ export interface Kind<Ratings extends z.ZodObject = z.ZodObject> {
   terminals(device: Device): readonly Terminal[];
   /** Both even, so that turning about the centre keeps terminals on the grid. */
   size(device: Device): { readonly width: number; readonly height: number };
+  /**
+   * What stands for a rating that the document leaves out, by key. Shown as a default, never written into a
+   * document. Ratings that safety hangs on are not here: unknown is not passed.
+   */
+  defaults(device: Device): Readonly<Record<string, number | string | boolean>>;
+  /** How it enters the network in a mode. */
+  network(device: Device, condition: Condition): readonly Element[];
 }
 
 export function defineKind<Ratings extends z.ZodObject>(kind: Kind<Ratings>): Kind<Ratings> {

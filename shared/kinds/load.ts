@@ -1,6 +1,6 @@
 import { z } from 'zod';
 
-import { amount, defineKind } from './kind.ts';
+import { amount, defineKind, readRatings } from './kind.ts';
 
 export const LOAD_SYMBOLS = [
   'plain',
@@ -24,27 +24,29 @@ const LETTERS: Readonly<Record<string, string>> = {
   socket: 'X',
 };
 
+const ratings = z.strictObject({
+  nominalV: amount,
+  ratedA: amount.optional(),
+  ratedW: amount.optional(),
+  minV: amount.optional(),
+  maxV: amount.optional(),
+  model: z.enum(['current', 'power', 'resistance']).optional(),
+  dropClass: z.enum(['general', 'critical']).optional(),
+  hoursPerDay: amount.optional(),
+  demand: z.enum(['continuous', 'intermittent', 'momentary']).optional(),
+  onMinutes: amount.optional(),
+  duty: z.enum(['bilge', 'navLight', 'blower', 'thruster', 'windlass', 'alarm', 'memory']).optional(),
+  lockedRotorA: amount.optional(),
+  thermallyProtected: z.boolean().optional(),
+  essential: z.boolean().optional(),
+});
+
 export const load = defineKind({
   kind: 'load',
   title: 'Load',
   drawer: 'Use',
   letter: (symbol) => LETTERS[symbol ?? 'plain'] ?? 'E',
-  ratings: z.strictObject({
-    nominalV: amount,
-    ratedA: amount.optional(),
-    ratedW: amount.optional(),
-    minV: amount.optional(),
-    maxV: amount.optional(),
-    model: z.enum(['current', 'power', 'resistance']).optional(),
-    dropClass: z.enum(['general', 'critical']).optional(),
-    hoursPerDay: amount.optional(),
-    demand: z.enum(['continuous', 'intermittent', 'momentary']).optional(),
-    onMinutes: amount.optional(),
-    duty: z.enum(['bilge', 'navLight', 'blower', 'thruster', 'windlass', 'alarm', 'memory']).optional(),
-    lockedRotorA: amount.optional(),
-    thermallyProtected: z.boolean().optional(),
-    essential: z.boolean().optional(),
-  }),
+  ratings,
   symbols: LOAD_SYMBOLS as readonly [string, ...string[]],
   offers: [
     { partId: 'load-plain', title: 'DC load', symbol: 'plain', ratings: { nominalV: 12, ratedA: 5 } },
@@ -116,4 +118,41 @@ export const load = defineKind({
     { name: 'neg', role: 'dc-', x: 2, y: 6 },
   ],
   size: () => ({ width: 4, height: 6 }),
+  defaults: (device) => {
+    const { duty } = readRatings(ratings, device);
+    return {
+      model: 'current',
+      dropClass: duty !== undefined && CRITICAL_DUTIES.has(duty) ? 'critical' : 'general',
+      demand: duty !== undefined && MOMENTARY_DUTIES.has(duty) ? 'momentary' : 'continuous',
+      thermallyProtected: false,
+      essential: false,
+    };
+  },
+  network: (device, { mode, state }) => {
+    const { nominalV, ratedA, ratedW, model = 'current' } = readRatings(ratings, device);
+    const amount = loadAmount(model, nominalV, ratedA, ratedW);
+    if (amount === undefined) return [];
+    const on = mode !== 'all-charging' && (mode === 'all-on' || state.on !== false);
+    return [{ type: 'load', pos: 'pos', neg: 'neg', on, model, amount, fraction: state.fraction ?? 1 }];
+  },
 });
+
+const CRITICAL_DUTIES: ReadonlySet<string> = new Set(['bilge', 'navLight', 'blower']);
+const MOMENTARY_DUTIES: ReadonlySet<string> = new Set(['thruster', 'windlass']);
+
+/** A, W or ohm by the model, from whichever of the two ratings is there; undefined where they make no sense. */
+function loadAmount(
+  model: 'current' | 'power' | 'resistance',
+  nominalV: number | undefined,
+  ratedA: number | undefined,
+  ratedW: number | undefined,
+): number | undefined {
+  const v = nominalV ?? Number.NaN;
+  const byModel = {
+    current: ratedA ?? (ratedW ?? Number.NaN) / v,
+    power: ratedW ?? (ratedA ?? Number.NaN) * v,
+    resistance: ratedA === undefined ? (v * v) / (ratedW ?? Number.NaN) : v / ratedA,
+  };
+  const amount = byModel[model];
+  return Number.isFinite(amount) && amount > 0 ? amount : undefined;
+}

@@ -1,7 +1,8 @@
 import { z } from 'zod';
 
+import { SWITCH_CONTACT_OHM } from './element.ts';
 import { amount, count, defineKind, readRatings } from './kind.ts';
-import { poleTerminals } from './poles.ts';
+import { poleNames, poleTerminals } from './poles.ts';
 
 const ratings = z.strictObject({
   continuousA: amount,
@@ -50,4 +51,11 @@ export const switchKind = defineKind({
   ],
   terminals: (device) => poleTerminals(readRatings(ratings, device).poles ?? 1),
   size: (device) => ({ width: 6, height: 2 * (readRatings(ratings, device).poles ?? 1) }),
+  defaults: () => ({ poles: 1, role: 'branch', normal: 'closed' }),
+  network: (device, { mode, state }) => {
+    const { poles = 1, normal = 'closed' } = readRatings(ratings, device);
+    const told = mode === 'own' ? (state.closed ?? state.on) : undefined;
+    const pole = { ohm: SWITCH_CONTACT_OHM, closed: told ?? normal === 'closed', closable: true, protective: false };
+    return poleNames(poles).map(({ a, b }) => ({ type: 'contact', a, b, ...pole }));
+  },
 });

@@ -30,7 +30,7 @@ export const terminal = defineKind({
   ],
   terminals: (device) => {
     const ways = readRatings(ratings, device).ways ?? 4;
-    if (device.symbol !== 'splice') return rowOfTerminals(ways, pitchOf(device), 0, 'any');
+    if (device.symbol !== 'splice') return rowOfTerminals(ways, pitchOf(device), 1, 'any');
     return Array.from({ length: ways }, (_, i): Terminal => {
       const place = SPLICE_PLACES[i] ?? SPLICE_PLACES[0];
       return { name: String(i + 1), role: 'any', optional: true, ...place };
@@ -40,4 +40,11 @@ export const terminal = defineKind({
     device.symbol === 'splice'
       ? { width: 2, height: 2 }
       : { width: ((readRatings(ratings, device).ways ?? 4) - 1) * pitchOf(device) + 2, height: 2 },
+  defaults: () => ({ ways: 4 }),
+  network: (device) => [
+    {
+      type: 'join',
+      terminals: Array.from({ length: readRatings(ratings, device).ways ?? 4 }, (_, i) => String(i + 1)),
+    },
+  ],
 });

@@ -1,0 +1,248 @@
+import type { BatteryElement, ChargingElement, Condition, ContactElement, LoadElement } from '#shared/kinds/element.ts';
+import { kindOf } from '#shared/kinds/index.ts';
+import { basisOf, workOf } from '#shared/model/defaults.ts';
+import type { Design, Device, DeviceState, End, EntityId, Run } from '#shared/model/design.ts';
+
+import { runOhm } from './conductor.ts';
+
+/**
+ * A design as nodes and edges: what is joined by metal is one node; runs and what stands between the terminals of
+ * a device are edges. Open contacts, and loads and sources that are off, are edges too (they say so), so that the
+ * same network answers both "what flows" and "what could be reached". Removed work is not in it, nor is a run
+ * that has lost an end.
+ */
+export interface Network {
+  readonly nodes: readonly NetworkNode[];
+  readonly edges: readonly NetworkEdge[];
+  /** The node of a terminal; undefined where there is no such terminal in the network. */
+  nodeAt(device: EntityId, terminal: string): number | undefined;
+  /** All edges that end on a node, once each. */
+  edgesAt(node: number): readonly NetworkEdge[];
+}
+
+export interface NetworkNode {
+  readonly index: number;
+  /** In the order of the devices' ids, then of their terminals. */
+  readonly terminals: readonly End[];
+}
+
+/** Between the nodes `a` and `b`; for a run from → to, for a source or load pos → neg, else as the kind names its ways. */
+export type NetworkEdge = RunEdge | MountEdge | ContactEdge | SourceEdge | LoadEdge;
+
+interface Between {
+  readonly index: number;
+  readonly a: number;
+  readonly b: number;
+}
+
+export interface RunEdge extends Between {
+  readonly type: 'run';
+  readonly run: Run;
+  /** 0 where neither length nor resistance is known. */
+  readonly ohm: number;
+}
+
+/** Where a device sits on a stud with no wire between: `a` its own first terminal, `b` the stud. */
+export interface MountEdge extends Between {
+  readonly type: 'mount';
+  readonly device: Device;
+  readonly terminal: string;
+  readonly stud: End;
+}
+
+export interface ContactEdge extends Between {
+  readonly type: 'contact';
+  readonly device: Device;
+  readonly element: ContactElement;
+}
+
+export interface SourceEdge extends Between {
+  readonly type: 'source';
+  readonly device: Device;
+  readonly element: BatteryElement | ChargingElement;
+}
+
+export interface LoadEdge extends Between {
+  readonly type: 'load';
+  readonly device: Device;
+  readonly element: LoadElement;
+}
+
+/** The network in a mode, the built-in ones included. A mode the design does not have is `all-on`. */
+export function networkOf(design: Design, modeId: EntityId): Network {
+  const points = new Points();
+  const devices = [...inOrder(design.devices)].filter((device) => workOf(device) !== 'remove');
+  for (const device of devices) {
+    for (const terminal of kindOf(device)?.terminals(device) ?? []) points.add(device.id, terminal.name);
+  }
+
+  const drafts: Draft[] = [];
+  for (const device of devices) {
+    for (const element of kindOf(device)?.network(device, conditionOf(design, modeId, device.id)) ?? []) {
+      if (element.type === 'join') {
+        points.join(device.id, element.terminals);
+        continue;
+      }
+      const [from, to] = element.type === 'contact' ? [element.a, element.b] : [element.pos, element.neg];
+      const a = points.at(device.id, from);
+      const b = points.at(device.id, to);
+      if (a === undefined || b === undefined) continue;
+      if (element.type === 'contact') drafts.push({ type: 'contact', device, element, a, b });
+      else if (element.type === 'load') drafts.push({ type: 'load', device, element, a, b });
+      else drafts.push({ type: 'source', device, element, a, b });
+    }
+    const mount = mountOf(device, points);
+    if (mount) drafts.push(mount);
+  }
+  const basis = basisOf(design);
+  for (const run of inOrder(design.runs)) {
+    if (workOf(run) === 'remove') continue;
+    const a = points.at(run.from?.device, run.from?.terminal);
+    const b = points.at(run.to?.device, run.to?.terminal);
+    if (a === undefined || b === undefined) continue;
+    drafts.push({ type: 'run', run, ohm: runOhm(run, basis, design.zones ?? {}) ?? 0, a, b });
+  }
+  return finish(points, drafts);
+}
+
+/** What a mode says of a device; see `Condition`. */
+export function conditionOf(design: Design, modeId: EntityId, deviceId: EntityId): Condition {
+  if (modeId === 'all-charging') return { mode: 'all-charging', state: {} };
+  const states = own(own(design.modes, modeId)?.states, deviceId);
+  return modeId === 'all-on' || !own(design.modes, modeId)
+    ? { mode: 'all-on', state: {} }
+    : { mode: 'own', state: states ?? ({} satisfies DeviceState) };
+}
+
+export interface Step {
+  readonly edge: NetworkEdge;
+  readonly from: number;
+  readonly to: number;
+}
+
+/**
+ * Walks outward from a node, nearest first by edges, over those `passes` lets through; every edge once, those it
+ * stops at included: a step is told before it is asked whether the walk goes on beyond it.
+ */
+export function* walkFrom(
+  network: Network,
+  start: number,
+  passes: (step: Step) => boolean,
+): Generator<Step, void, undefined> {
+  const seenNodes = new Set([start]);
+  const seenEdges = new Set<number>();
+  const queue = [start];
+  for (const from of queue) {
+    for (const edge of network.edgesAt(from)) {
+      if (seenEdges.has(edge.index)) continue;
+      seenEdges.add(edge.index);
+      const step = { edge, from, to: otherEnd(edge, from) };
+      yield step;
+      if (seenNodes.has(step.to) || !passes(step)) continue;
+      seenNodes.add(step.to);
+      queue.push(step.to);
+    }
+  }
+}
+
+export function otherEnd(edge: NetworkEdge, node: number): number {
+  return edge.a === node ? edge.b : edge.a;
+}
+
+/** Whether an edge is a conductor or a closed way: metal all through, of little resistance. */
+export function isConducting(edge: NetworkEdge): boolean {
+  if (edge.type === 'run' || edge.type === 'mount') return true;
+  return edge.type === 'contact' && edge.element.closed;
+}
+
+type Unfinished<Edge> = Edge extends NetworkEdge ? Omit<Edge, 'index'> : never;
+type Draft = Unfinished<NetworkEdge>;
+
+/** Terminals, and which of them are one piece of metal. */
+class Points {
+  readonly ends: End[] = [];
+  private readonly byDevice = new Map<string, Map<string, number>>();
+  private readonly parents: number[] = [];
+
+  add(device: string, terminal: string): void {
+    const terminals = this.byDevice.get(device) ?? new Map<string, number>();
+    this.byDevice.set(device, terminals);
+    if (terminals.has(terminal)) return;
+    terminals.set(terminal, this.ends.length);
+    this.parents.push(this.ends.length);
+    this.ends.push({ device, terminal });
+  }
+
+  at(device: string | undefined, terminal: string | undefined): number | undefined {
+    return this.byDevice.get(device ?? '')?.get(terminal ?? '');
+  }
+
+  first(device: string): number | undefined {
+    return this.byDevice.get(device)?.values().next().value;
+  }
+
+  join(device: string, terminals: readonly string[]): void {
+    const [first, ...rest] = terminals.flatMap((terminal) => this.at(device, terminal) ?? []);
+    for (const point of rest) this.parents[this.rootOf(point)] = this.rootOf(first!);
+  }
+
+  rootOf(point: number): number {
+    let at = point;
+    while (this.parents[at] !== at) {
+      this.parents[at] = this.parents[this.parents[at]!]!;
+      at = this.parents[at]!;
+    }
+    return at;
+  }
+}
+
+function mountOf(device: Device, points: Points): Draft | undefined {
+  const stud = device.mountedOn;
+  const a = points.first(device.id);
+  const b = points.at(stud?.device, stud?.terminal);
+  if (!stud || a === undefined || b === undefined || stud.device === device.id) return undefined;
+  return { type: 'mount', device, terminal: points.ends[a]!.terminal, stud, a, b };
+}
+
+function finish(points: Points, drafts: readonly Draft[]): Network {
+  const nodeOfRoot = new Map<number, number>();
+  const terminals: End[][] = [];
+  const nodeOfPoint = points.ends.map((end, point) => {
+    const root = points.rootOf(point);
+    const node = nodeOfRoot.get(root) ?? terminals.push([]) - 1;
+    nodeOfRoot.set(root, node);
+    terminals[node]!.push(end);
+    return node;
+  });
+  const edges = drafts.map(
+    (draft, index) => ({ ...draft, index, a: nodeOfPoint[draft.a]!, b: nodeOfPoint[draft.b]! }) as NetworkEdge,
+  );
+  const edgesByNode: NetworkEdge[][] = terminals.map(() => []);
+  for (const edge of edges) {
+    edgesByNode[edge.a]!.push(edge);
+    if (edge.b !== edge.a) edgesByNode[edge.b]!.push(edge);
+  }
+  return {
+    nodes: terminals.map((ends, index) => ({ index, terminals: ends })),
+    edges,
+    nodeAt(device, terminal) {
+      const point = points.at(device, terminal);
+      return point === undefined ? undefined : nodeOfPoint[point];
+    },
+    edgesAt: (node) => edgesByNode[node] ?? [],
+  };
+}
+
+/** By id, so that the same design gives the same network whatever the order of its keys. */
+function inOrder<T extends { readonly id: EntityId }>(entities: Readonly<Record<EntityId, T>> | undefined): T[] {
+  return Object.keys(entities ?? {})
+    .toSorted()
+    .flatMap((id) => {
+      const entity = entities![id];
+      return entity && typeof entity === 'object' ? [{ ...entity, id }] : [];
+    });
+}
+
+function own<T>(record: Readonly<Record<string, T>> | undefined, key: string): T | undefined {
+  return record && Object.hasOwn(record, key) ? record[key] : undefined;
+}
