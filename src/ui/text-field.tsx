@@ -1,0 +1,44 @@
+import { useId, type InputHTMLAttributes, type ReactNode, type Ref } from 'react';
+
+/** A field of a form that is sent as a whole: sign-in, a new vessel. A wrong value keeps its text and says why below. */
+export function TextField({
+  caption,
+  wrong,
+  hint,
+  unit,
+  alone,
+  big = true,
+  ref,
+  ...rest
+}: InputHTMLAttributes<HTMLInputElement> & {
+  readonly caption: string;
+  readonly wrong?: string;
+  readonly hint?: ReactNode;
+  readonly unit?: string;
+  readonly alone?: boolean;
+  readonly big?: boolean;
+  readonly ref?: Ref<HTMLInputElement>;
+}) {
+  const saidId = useId();
+  const says = wrong ?? hint;
+  return (
+    <label className={['cell edit', big && 'big', alone && 'alone', wrong && 'wrong'].filter(Boolean).join(' ')}>
+      <small>{caption}</small>
+      <span className="row">
+        <input
+          {...rest}
+          ref={ref}
+          className="in"
+          aria-invalid={wrong !== undefined || undefined}
+          aria-describedby={says === undefined ? undefined : saidId}
+        />
+        {unit !== undefined && <span className="unit">{unit}</span>}
+      </span>
+      {says !== undefined && (
+        <span className={wrong === undefined ? 'hint' : 'said'} id={saidId}>
+          {says}
+        </span>
+      )}
+    </label>
+  );
+}
