@@ -16,17 +16,39 @@ export interface Tabs {
   close(): void;
 }
 
+/** Tabs of a browser, which can be heard from before there is anything to tell the words to. */
+export interface BrowserTabs extends Tabs {
+  /** Keeps what is said from now on, until it is released to who listens by then. */
+  hold(): { release(): void };
+}
+
 /** Tabs of one person on one vessel: other people signed in on this device never hear them. */
-export function openTabs(personId: string, vesselId: string): Tabs {
+export function openTabs(personId: string, vesselId: string): BrowserTabs {
   const scope = `ampwright:${personId}:${vesselId}`;
   const channel = new BroadcastChannel(scope);
   const closing = new AbortController();
+  const ears: ((word: TabWord) => void)[] = [];
+  let held: TabWord[] | null = null;
+  channel.addEventListener('message', (event: MessageEvent<TabWord>) => {
+    if (held !== null) held.push(event.data);
+    else for (const hear of ears) hear(event.data);
+  });
   return {
+    hold() {
+      const words: TabWord[] = [];
+      held = words;
+      return {
+        release() {
+          held = null;
+          for (const word of words) for (const hear of ears) hear(word);
+        },
+      };
+    },
     tell(word) {
       if (!closing.signal.aborted) channel.postMessage(word);
     },
     listen(hear) {
-      channel.addEventListener('message', (event: MessageEvent<TabWord>) => hear(event.data));
+      ears.push(hear);
     },
     async alone(name, work) {
       return await navigator.locks.request(`${scope}:${name}`, { signal: closing.signal }, work);
