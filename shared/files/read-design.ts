@@ -1,9 +1,9 @@
 import { DesignFile } from '#shared/kinds/design-file.ts';
+import { findBadReference, type Refusal } from '#shared/kinds/references.ts';
 import { sizeOf } from '#shared/model/size.ts';
 import type { Design, Run } from '#shared/model/design.ts';
 
-import { findBadReference } from './references.ts';
-import { firstOf, refusalOf, type Path, type Refusal } from './refusal.ts';
+import { firstOf, refusalOf, type Path } from './refusal.ts';
 
 export type ReadDesign =
   | { readonly ok: true; readonly design: Design }

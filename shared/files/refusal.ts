@@ -1,11 +1,8 @@
 import type { z } from 'zod';
 
-export type Path = readonly (string | number)[];
+import type { Refusal } from '#shared/kinds/references.ts';
 
-export interface Refusal {
-  readonly path: Path;
-  readonly reason: string;
-}
+export type Path = Refusal['path'];
 
 type Issue = z.core.$ZodIssue;
 

@@ -1,7 +1,14 @@
-import { kindOf } from '#shared/kinds/index.ts';
 import { FAMILIES, type Design, type Device, type End, type Run } from '#shared/model/design.ts';
 
-import type { Path, Refusal } from './refusal.ts';
+import { kindOf } from './index.ts';
+
+type Path = readonly (string | number)[];
+
+/** What is wrong in a document, and where. */
+export interface Refusal {
+  readonly path: Path;
+  readonly reason: string;
+}
 
 /** What a schema cannot say: keys equal to ids, and everything that is named is there. The first that is wrong. */
 export function findBadReference(design: Design): Refusal | null {
