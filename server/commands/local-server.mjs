@@ -35,20 +35,22 @@ export function startServer({ env, port, host, dataFolder, nodeArgs = ['--import
 }
 
 async function waitUntilReady({ child, ended, host, port, log }) {
-  let code;
-  void ended.then((value) => (code = value));
+  if (await waitUntilAnswers({ ended, host, port })) return;
+  const hasEnded = child.exitCode !== null || child.signalCode !== null || child.pid === undefined;
+  child.kill('SIGKILL');
+  const what = hasEnded ? 'The server did not start.' : `The server did not answer within ${READY_MS / 1000} s.`;
+  throw new Stopped(`${what}\n${lastLines(log)}`);
+}
+
+/** True once the server answers, false if it ends before or takes too long. */
+export async function waitUntilAnswers({ ended, host, port }) {
+  let hasEnded = false;
+  void ended.then(() => (hasEnded = true));
   const asked = { '0.0.0.0': '127.0.0.1', '::': '[::1]' }[host] ?? host;
-  for (
-    const deadline = Date.now() + READY_MS;
-    !(await answers(`http://${asked}:${port}/api/server`));
-    await pause(40)
-  ) {
-    if (code !== undefined) throw new Stopped(`The server did not start.\n${lastLines(log)}`);
-    if (Date.now() > deadline) {
-      child.kill('SIGKILL');
-      throw new Stopped(`The server did not answer within ${READY_MS / 1000} s.\n${lastLines(log)}`);
-    }
+  for (const deadline = Date.now() + READY_MS; !hasEnded && Date.now() < deadline; await pause(40)) {
+    if (await answers(`http://${asked}:${port}/api/server`)) return !hasEnded;
   }
+  return false;
 }
 
 async function stop(child, ended) {

@@ -46,19 +46,9 @@ export function readKept(file) {
 export function keepSecrets(folder) {
   const file = join(folder, 'secrets.json');
   const kept = readKept(file) ?? {};
-  const secrets = {
-    authSecret: kept.authSecret ?? randomBytes(32).toString('base64url'),
-    demoPassword: kept.demoPassword ?? randomWords(),
-  };
-  if (kept.authSecret !== secrets.authSecret || kept.demoPassword !== secrets.demoPassword) writeKept(file, secrets);
+  const secrets = { authSecret: kept.authSecret ?? randomBytes(32).toString('base64url') };
+  if (kept.authSecret === undefined) writeKept(file, secrets);
   return secrets;
-}
-
-/** A password that can be read off one screen and typed on another: five groups of four, 100 bits. */
-function randomWords() {
-  const letters = 'abcdefghjkmnpqrstuvwxyz23456789x';
-  const drawn = [...randomBytes(20)].map((byte) => letters[byte % 32]).join('');
-  return drawn.match(/.{4}/g).join('-');
 }
 
 export function requireSpace(folder, megabytes) {

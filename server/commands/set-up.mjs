@@ -27,15 +27,18 @@ export async function setUp({ settings, say, stops, alsoWhileAlone = async () =>
       const { database, url } = await openDatabase(settings, dataFolder, say, stops);
       const env = serverEnvironment({ settings, dataFolder, secrets, url, isOurs: database !== undefined });
 
-      if (database?.fresh) await emptyDatabase(database);
-      await runTypeScript('The database could not be brought up to date.', 'server/commands/migrate.ts', [], env);
+      const demoFolder = join(dataFolder, 'demo');
       if (database?.fresh) {
+        await emptyDatabase(database);
         say('Putting in the demo people and vessels ...');
-        await runTypeScript('The demo could not be put in.', 'server/commands/seed.ts', [], env);
+        await runTypeScript('The demo could not be put in.', 'server/commands/seed.ts', [], {
+          ...env,
+          DEMO: demoFolder,
+        });
         database.markUsed();
       }
       await alsoWhileAlone();
-      return { env, database, dataFolder, secrets };
+      return { env, database, dataFolder, demoFolder };
     },
     sayWaiting,
   );
@@ -68,9 +71,9 @@ function serverEnvironment({ settings, dataFolder, secrets, url, isOurs }) {
     PUBLIC_URL: settings.address,
     AMPWRIGHT_DATA: dataFolder,
     AUTH_SECRET: process.env.AUTH_SECRET || secrets.authSecret,
+    DEMO: undefined, // the server itself never puts the demo in here; see above
     // A mailbox that anyone on this machine can read stands in for the post only beside a database of our own.
-    ...(isOurs && !process.env.SMTP_URL ? { LOCAL_MAILBOX: '1' } : {}),
-    ...(isOurs ? { DEMO_PASSWORD: secrets.demoPassword } : {}),
+    ...(isOurs && !process.env.SMTP_URL ? { MAILBOX: join(dataFolder, 'mail') } : {}),
   };
 }
 

@@ -12,7 +12,7 @@ const stops = collectStops();
 
 try {
   const settings = readStartSettings();
-  const { env, database, dataFolder, secrets } = await setUp({
+  const { env, database, dataFolder, demoFolder } = await setUp({
     settings,
     say,
     stops,
@@ -22,7 +22,7 @@ try {
   stops.add(server.stop);
   await server.ready;
   stops.expectToBeEnded();
-  printWelcome({ settings, database, secrets, dataFolder });
+  printWelcome({ settings, database, demoFolder, dataFolder });
 
   const code = await server.ended;
   if (!stops.isStopping()) throw new Stopped(`The server ended by itself (${code}).\n${lastLines(server.log)}`);

@@ -1,0 +1,61 @@
+import { createServer } from 'node:net';
+
+import { defineConfig } from '@playwright/test';
+
+// Chosen once by the first process that reads this file; the workers inherit it.
+process.env['E2E_PORT'] ??= String(await freePort());
+const address = `http://127.0.0.1:${process.env['E2E_PORT']}`;
+
+export default defineConfig({
+  testDir: './journeys',
+  outputDir: '../test-results',
+  fullyParallel: true,
+  forbidOnly: process.env['CI'] !== undefined,
+  retries: 0,
+  workers: 2,
+  timeout: 60_000,
+  expect: { timeout: 10_000 },
+  use: {
+    baseURL: address,
+    viewport: { width: 1440, height: 900 },
+    locale: 'en-US',
+    timezoneId: 'UTC',
+    reducedMotion: 'reduce',
+    screenshot: 'only-on-failure',
+    trace: 'retain-on-failure',
+    launchOptions: {
+      executablePath: process.env['CHROMIUM_PATH'] ?? '/usr/bin/chromium',
+      args: [
+        '--no-sandbox', // as root, in a container
+        '--disable-gpu',
+        '--disable-quic',
+        '--no-first-run',
+        '--disable-background-networking',
+        '--disable-component-update',
+        '--disable-sync',
+      ],
+    },
+  },
+  webServer: {
+    command: 'node e2e/fixtures/serve.mjs',
+    cwd: '..',
+    url: `${address}/api/server`,
+    timeout: 120_000,
+    reuseExistingServer: false,
+    stdout: 'ignore',
+    stderr: 'pipe',
+    gracefulShutdown: { signal: 'SIGTERM', timeout: 20_000 },
+  },
+});
+
+function freePort(): Promise<number> {
+  return new Promise((done, refuse) => {
+    const server = createServer();
+    server.once('error', refuse);
+    server.listen(0, '127.0.0.1', () => {
+      const address = server.address();
+      const port = typeof address === 'object' && address !== null ? address.port : 0;
+      server.close(() => done(port));
+    });
+  });
+}

@@ -1,0 +1,12 @@
+/** Numbers that look random and are the same for the same seed (mulberry32), so that a failure can be had again. */
+export function seededRandom(seed: number): { whole(below: number): number } {
+  let state = seed >>> 0;
+  return {
+    whole(below) {
+      state = (state + 0x6d2b79f5) >>> 0;
+      let mixed = Math.imul(state ^ (state >>> 15), state | 1);
+      mixed ^= mixed + Math.imul(mixed ^ (mixed >>> 7), mixed | 61);
+      return Math.floor((((mixed ^ (mixed >>> 14)) >>> 0) / 2 ** 32) * below);
+    },
+  };
+}
