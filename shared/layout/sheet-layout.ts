@@ -17,6 +17,8 @@ export interface RunLayout {
   /** Points on the run where it hops over an earlier one. */
   readonly hops: readonly Point[];
   readonly label: LabelLayout | null;
+  /** Where the code letters of its colour stand at the other end than the label, when there is room. */
+  readonly code: CodeLayout | null;
   /** A run between two sheets: the flags at its ends on this sheet. */
   readonly stubs: readonly StubLayout[];
 }
@@ -27,9 +29,19 @@ export interface LabelLayout {
   readonly y: number;
   readonly anchor: 'start' | 'middle' | 'end';
   readonly text: string;
+  /** The code letters of the run's colour, for which room is kept behind the text. */
+  readonly code: string;
   readonly box: Box;
   /** From the label to the run, where it does not stand beside it. */
   readonly leader?: readonly [Point, Point];
+}
+
+export interface CodeLayout {
+  readonly x: number;
+  readonly y: number;
+  readonly anchor: 'start' | 'end';
+  readonly text: string;
+  readonly box: Box;
 }
 
 export interface TagLayout {
@@ -40,12 +52,16 @@ export interface TagLayout {
   readonly anchor: 'start' | 'end' | 'middle';
   /** The mark first. */
   readonly lines: readonly string[];
+  /** The second line stands on the first, behind the mark. */
+  readonly inline?: true;
   readonly box: Box;
 }
 
 export interface StubLayout {
+  /** The middle of the flag. */
   readonly x: number;
   readonly y: number;
+  /** The way the run goes on, from its source. */
   readonly points: 'left' | 'right' | 'up' | 'down';
   /** `2.B1`: sheet and square of the other end. */
   readonly text: string;

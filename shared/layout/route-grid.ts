@@ -1,0 +1,120 @@
+import type { Box, Point } from '#shared/kinds/place.ts';
+
+/**
+ * The sheet as squares of 8 with what each costs a run to pass. Costs are in squares: a run goes that far round to
+ * avoid the thing. Nothing is forbidden, so that every run has a route, however crowded the sheet.
+ */
+export interface RouteGrid {
+  readonly columns: number;
+  readonly rows: number;
+  /** Devices, tags, flags, title block. */
+  readonly cost: Float32Array;
+  /** How many level and upright runs pass. */
+  readonly level: Uint8Array;
+  readonly upright: Uint8Array;
+  /** Corners and ends of runs, and terminals. */
+  readonly corner: Uint8Array;
+}
+
+export const STEP = 8;
+
+export const COST = {
+  bend: 3,
+  crossing: 6,
+  /** On top of another run. */
+  overlap: 150,
+  /** Through a corner, an end or a terminal that is not the run's own. */
+  touch: 150,
+  /** Nearer than a lane to a run beside it. */
+  lane: 2,
+  inside: 1000,
+  edge: 25,
+  near: 0.75,
+  text: 12,
+  /** Leaving a terminal by another side than its own. */
+  sideways: 8,
+  backwards: 60,
+  offSheet: 500,
+} as const;
+
+export function makeGrid(width: number, height: number): RouteGrid {
+  const columns = Math.ceil(width / STEP) + 1;
+  const rows = Math.ceil(height / STEP) + 1;
+  const size = columns * rows;
+  return {
+    columns,
+    rows,
+    cost: new Float32Array(size),
+    level: new Uint8Array(size),
+    upright: new Uint8Array(size),
+    corner: new Uint8Array(size),
+  };
+}
+
+export function nodeAt(grid: RouteGrid, point: Point): number {
+  const column = Math.min(grid.columns - 1, Math.max(0, Math.round(point.x / STEP)));
+  const row = Math.min(grid.rows - 1, Math.max(0, Math.round(point.y / STEP)));
+  return row * grid.columns + column;
+}
+
+export function pointOf(grid: RouteGrid, node: number): Point {
+  return { x: (node % grid.columns) * STEP, y: Math.floor(node / grid.columns) * STEP };
+}
+
+/** A device: not through it, not along its edge, and rather not close by. */
+export function addDevice(grid: RouteGrid, box: Box): void {
+  eachNode(grid, box, STEP, (node, x, y) => {
+    const away = Math.max(box.x - x, x - box.x - box.width, box.y - y, y - box.y - box.height);
+    grid.cost[node]! += away < 0 ? COST.inside : away === 0 ? COST.edge : COST.near;
+  });
+}
+
+export function addCost(grid: RouteGrid, box: Box, cost: number): void {
+  eachNode(grid, box, 0, (node) => {
+    grid.cost[node]! += cost;
+  });
+}
+
+export function addTerminal(grid: RouteGrid, point: Point): void {
+  grid.corner[nodeAt(grid, point)] = 1;
+}
+
+export function addRun(grid: RouteGrid, points: readonly Point[]): void {
+  for (let i = 1; i < points.length; i++) {
+    const from = points[i - 1]!;
+    const to = points[i]!;
+    const a = nodeAt(grid, from);
+    const b = nodeAt(grid, to);
+    grid.corner[a] = 1;
+    grid.corner[b] = 1;
+    const isLevel = from.y === to.y;
+    const stride = isLevel ? 1 : grid.columns;
+    const use = isLevel ? grid.level : grid.upright;
+    for (let node = Math.min(a, b); node <= Math.max(a, b); node += stride) use[node]!++;
+  }
+}
+
+/** Everything beyond the frame and under the title block is for drawing only when there is no other way. */
+export function addOffSheet(grid: RouteGrid, frame: Box, keepClear: readonly Box[]): void {
+  for (let node = 0; node < grid.cost.length; node++) {
+    const { x, y } = pointOf(grid, node);
+    const isOff = x <= frame.x || y <= frame.y || x >= frame.x + frame.width || y >= frame.y + frame.height;
+    if (isOff) grid.cost[node]! += COST.offSheet;
+  }
+  for (const box of keepClear) addCost(grid, box, COST.offSheet);
+}
+
+function eachNode(
+  grid: RouteGrid,
+  box: Box,
+  margin: number,
+  visit: (node: number, x: number, y: number) => void,
+): void {
+  const left = Math.max(0, Math.ceil((box.x - margin) / STEP));
+  const right = Math.min(grid.columns - 1, Math.floor((box.x + box.width + margin) / STEP));
+  const top = Math.max(0, Math.ceil((box.y - margin) / STEP));
+  const bottom = Math.min(grid.rows - 1, Math.floor((box.y + box.height + margin) / STEP));
+  for (let row = top; row <= bottom; row++) {
+    for (let column = left; column <= right; column++) visit(row * grid.columns + column, column * STEP, row * STEP);
+  }
+}
