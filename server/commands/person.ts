@@ -53,13 +53,16 @@ export async function signUp(address: string, who: Credentials & { readonly name
   return signIn(address, who);
 }
 
-/** The link of the newest mail to an address that leads to a page; waits for the mail to come. */
-export async function readLink(address: string, email: string, page: string): Promise<string> {
+/**
+ * The link of the newest mail to an address that leads to a page; waits for the mail to come. `about` tells one mail
+ * from another to the same address: the vessel's name, say.
+ */
+export async function readLink(address: string, email: string, page: string, about = ''): Promise<string> {
   for (const deadline = Date.now() + 20_000; Date.now() < deadline;) {
     const reply = await fetch(`${address}${listMail.path}`);
     const { rows } = listMail.reply.parse(await reply.json());
     const link = rows
-      .filter((mail) => mail.to.includes(email))
+      .filter((mail) => mail.to.includes(email) && `${mail.subject}\n${mail.text}`.includes(about))
       .flatMap((mail) => mail.links)
       .find((candidate) => new URL(candidate).pathname.startsWith(page));
     if (link !== undefined) return link;
