@@ -37,6 +37,12 @@ function units({ chemistry, nominalV }: BatteryElement): number {
   return chemistry === 'lifepo4' && nominalV % 12 !== 0 ? nominalV / 12.8 : nominalV / 12;
 }
 
+/** What the resistance of a battery in the greatest fault is taken from. */
+export function resistanceFrom({ internalMilliohm, shortCircuitA }: BatteryElement): 'maker' | 'entered' | 'usual' {
+  if (shortCircuitA !== undefined && shortCircuitA > 0) return 'maker';
+  return internalMilliohm !== undefined && internalMilliohm >= 0 ? 'entered' : 'usual';
+}
+
 function internalOhm(battery: BatteryElement, emfV: number, batteryCase: BatteryCase): number {
   const { internalMilliohm, shortCircuitA, chemistry, capacityAh } = battery;
   const told = internalMilliohm !== undefined && internalMilliohm >= 0 ? internalMilliohm / 1000 : undefined;

@@ -92,7 +92,16 @@ export function prepareCircuit(
     ties.map((index) => stiff[index]!.b),
   );
   return {
-    ...{ nodeCount, stiff, loads, groups, aboveV, ties, contradictions, resistive, pattern, tiePattern },
+    nodeCount,
+    stiff,
+    loads,
+    groups,
+    aboveV,
+    ties,
+    contradictions,
+    resistive,
+    pattern,
+    tiePattern,
     partOf: (node) => alone.parts[group(node)]!,
   };
 }

@@ -177,3 +177,44 @@ export function potentialsFor(factor: Factor, fedA: ArrayLike<number>): Float64A
   }
   return potentials;
 }
+
+/**
+ * The potentials of a few nodes for currents fed into a few: only the way from them to the last place of their part
+ * is worked through, so that asking at every device of a design stays cheap.
+ */
+export function probe(
+  factor: Factor,
+  fed: readonly (readonly [node: number, amps: number])[],
+  asked: readonly number[],
+): number[] {
+  const { places } = factor.pattern;
+  const held = new Map<number, number>();
+  for (const [node] of fed) wayFrom(factor.pattern, places[node]!, held);
+  for (const [node, amps] of fed) held.set(places[node]!, held.get(places[node]!)! + amps);
+  const { starts, rows } = factor.pattern;
+  for (const place of [...held.keys()].sort((p, q) => p - q)) {
+    const through = held.get(place)!;
+    if (through === 0) continue;
+    for (let at = starts[place]!; at < starts[place + 1]!; at++) {
+      held.set(rows[at]!, held.get(rows[at]!)! + factor.shares[at]! * through);
+    }
+  }
+  for (const node of asked) wayFrom(factor.pattern, places[node]!, held);
+  for (const place of [...held.keys()].sort((p, q) => q - p)) {
+    const pivot = factor.pivots[place]!;
+    let volts = pivot === 0 ? 0 : held.get(place)! / pivot;
+    for (let at = starts[place]!; at < starts[place + 1]!; at++) volts += factor.shares[at]! * held.get(rows[at]!)!;
+    held.set(place, volts);
+  }
+  return asked.map((node) => held.get(places[node]!)!);
+}
+
+/** Adds a place and all that its column leads to; the first row of a column is the next on the way. */
+function wayFrom({ starts, rows }: Pattern, place: number, held: Map<number, number>): void {
+  let at = place;
+  while (!held.has(at)) {
+    held.set(at, 0);
+    if (starts[at] === starts[at + 1]) return;
+    at = rows[starts[at]!]!;
+  }
+}

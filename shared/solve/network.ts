@@ -1,9 +1,10 @@
 import type { BatteryElement, ChargingElement, Condition, ContactElement, LoadElement } from '#shared/kinds/element.ts';
 import { kindOf } from '#shared/kinds/index.ts';
 import { basisOf, workOf } from '#shared/model/defaults.ts';
-import type { Design, Device, DeviceState, End, EntityId, Run } from '#shared/model/design.ts';
+import type { Design, Device, End, EntityId, Run } from '#shared/model/design.ts';
 
 import { runOhm } from './conductor.ts';
+import { Union } from './union.ts';
 
 /**
  * A design as nodes and edges: what is joined by metal is one node; runs and what stands between the terminals of
@@ -70,17 +71,15 @@ export interface LoadEdge extends Between {
 
 /** The network in a mode, the built-in ones included. A mode the design does not have is `all-on`. */
 export function networkOf(design: Design, modeId: EntityId): Network {
-  const points = new Points();
   const devices = [...inOrder(design.devices)].filter((device) => workOf(device) !== 'remove');
-  for (const device of devices) {
-    for (const terminal of kindOf(device)?.terminals(device) ?? []) points.add(device.id, terminal.name);
-  }
+  const points = pointsOf(devices);
 
   const drafts: Draft[] = [];
   for (const device of devices) {
     for (const element of kindOf(device)?.network(device, conditionOf(design, modeId, device.id)) ?? []) {
       if (element.type === 'join') {
-        points.join(device.id, element.terminals);
+        const joined = element.terminals.flatMap((terminal) => points.at(device.id, terminal) ?? []);
+        for (const point of joined) points.metal.join(joined[0]!, point);
         continue;
       }
       const [from, to] = element.type === 'contact' ? [element.a, element.b] : [element.pos, element.neg];
@@ -96,9 +95,9 @@ export function networkOf(design: Design, modeId: EntityId): Network {
   }
   const basis = basisOf(design);
   for (const run of inOrder(design.runs)) {
-    if (workOf(run) === 'remove') continue;
-    const a = points.at(run.from?.device, run.from?.terminal);
-    const b = points.at(run.to?.device, run.to?.terminal);
+    if (workOf(run) === 'remove' || !isReadable(run)) continue;
+    const a = points.at(run.from.device, run.from.terminal);
+    const b = points.at(run.to.device, run.to.terminal);
     if (a === undefined || b === undefined) continue;
     drafts.push({ type: 'run', run, ohm: runOhm(run, basis, design.zones ?? {}) ?? 0, a, b });
   }
@@ -108,10 +107,9 @@ export function networkOf(design: Design, modeId: EntityId): Network {
 /** What a mode says of a device; see `Condition`. */
 export function conditionOf(design: Design, modeId: EntityId, deviceId: EntityId): Condition {
   if (modeId === 'all-charging') return { mode: 'all-charging', state: {} };
-  const states = own(own(design.modes, modeId)?.states, deviceId);
-  return modeId === 'all-on' || !own(design.modes, modeId)
-    ? { mode: 'all-on', state: {} }
-    : { mode: 'own', state: states ?? ({} satisfies DeviceState) };
+  const mode = modeId === 'all-on' ? undefined : own(design.modes, modeId);
+  if (!mode) return { mode: 'all-on', state: {} };
+  return { mode: 'own', state: own(mode.states, deviceId) ?? {} };
 }
 
 export interface Step {
@@ -159,47 +157,35 @@ type Unfinished<Edge> = Edge extends NetworkEdge ? Omit<Edge, 'index'> : never;
 type Draft = Unfinished<NetworkEdge>;
 
 /** Terminals, and which of them are one piece of metal. */
-class Points {
-  readonly ends: End[] = [];
-  private readonly byDevice = new Map<string, Map<string, number>>();
-  private readonly parents: number[] = [];
+interface Points {
+  readonly ends: readonly End[];
+  readonly metal: Union;
+  at(device: string, terminal: string): number | undefined;
+  first(device: string): number | undefined;
+}
 
-  add(device: string, terminal: string): void {
-    const terminals = this.byDevice.get(device) ?? new Map<string, number>();
-    this.byDevice.set(device, terminals);
-    if (terminals.has(terminal)) return;
-    terminals.set(terminal, this.ends.length);
-    this.parents.push(this.ends.length);
-    this.ends.push({ device, terminal });
-  }
-
-  at(device: string | undefined, terminal: string | undefined): number | undefined {
-    return this.byDevice.get(device ?? '')?.get(terminal ?? '');
-  }
-
-  first(device: string): number | undefined {
-    return this.byDevice.get(device)?.values().next().value;
-  }
-
-  join(device: string, terminals: readonly string[]): void {
-    const [first, ...rest] = terminals.flatMap((terminal) => this.at(device, terminal) ?? []);
-    for (const point of rest) this.parents[this.rootOf(point)] = this.rootOf(first!);
-  }
-
-  rootOf(point: number): number {
-    let at = point;
-    while (this.parents[at] !== at) {
-      this.parents[at] = this.parents[this.parents[at]!]!;
-      at = this.parents[at]!;
+function pointsOf(devices: readonly Device[]): Points {
+  const ends: End[] = [];
+  const byDevice = new Map<string, Map<string, number>>();
+  for (const device of devices) {
+    const terminals = new Map<string, number>();
+    byDevice.set(device.id, terminals);
+    for (const { name } of kindOf(device)?.terminals(device) ?? []) {
+      terminals.set(name, ends.push({ device: device.id, terminal: name }) - 1);
     }
-    return at;
   }
+  return {
+    ends,
+    metal: new Union(ends.length),
+    at: (device, terminal) => byDevice.get(device)?.get(terminal),
+    first: (device) => byDevice.get(device)?.values().next().value,
+  };
 }
 
 function mountOf(device: Device, points: Points): Draft | undefined {
   const stud = device.mountedOn;
   const a = points.first(device.id);
-  const b = points.at(stud?.device, stud?.terminal);
+  const b = stud && points.at(stud.device, stud.terminal);
   if (!stud || a === undefined || b === undefined || stud.device === device.id) return undefined;
   return { type: 'mount', device, terminal: points.ends[a]!.terminal, stud, a, b };
 }
@@ -208,7 +194,7 @@ function finish(points: Points, drafts: readonly Draft[]): Network {
   const nodeOfRoot = new Map<number, number>();
   const terminals: End[][] = [];
   const nodeOfPoint = points.ends.map((end, point) => {
-    const root = points.rootOf(point);
+    const root = points.metal.rootOf(point);
     const node = nodeOfRoot.get(root) ?? terminals.push([]) - 1;
     nodeOfRoot.set(root, node);
     terminals[node]!.push(end);
@@ -233,13 +219,20 @@ function finish(points: Points, drafts: readonly Draft[]): Network {
   };
 }
 
+/** A document is checked before it gets here; one that was not may not stop the engine. */
+function isReadable({ from, to, conductor }: Run): boolean {
+  const isThere = [from, to, conductor].every((part) => part !== null && typeof part === 'object');
+  return isThere && typeof conductor.size === 'string';
+}
+
 /** By id, so that the same design gives the same network whatever the order of its keys. */
 function inOrder<T extends { readonly id: EntityId }>(entities: Readonly<Record<EntityId, T>> | undefined): T[] {
   return Object.keys(entities ?? {})
     .toSorted()
     .flatMap((id) => {
       const entity = entities![id];
-      return entity && typeof entity === 'object' ? [{ ...entity, id }] : [];
+      if (!entity || typeof entity !== 'object') return [];
+      return [entity.id === id ? entity : { ...entity, id }];
     });
 }
 
