@@ -79,7 +79,7 @@ describe('npm start', () => {
   test('secrets are kept where only their owner can read them', async () => {
     const started = await start('secrets');
     await started.ready();
-    for (const file of ['secrets.json', 'mariadb/instance.json', 'mariadb/init.sql']) {
+    for (const file of ['secrets.json', 'demo/sign-ins.json', 'mariadb/instance.json', 'mariadb/init.sql']) {
       expect(statSync(join(started.folder, file)).mode & 0o077, file).toBe(0);
     }
     expect(statSync(started.folder).mode & 0o077).toBe(0);
@@ -96,7 +96,7 @@ describe('npm start', () => {
       await connection.end();
       expect(people).toEqual([]);
       expect(vessels).toEqual([]);
-      expect(started.output()).not.toContain('password');
+      expect(started.output()).not.toContain('sign-ins');
       expect((await fetch(`${started.address}/api/mailbox`)).status).toBe(404);
       await started.end('SIGTERM');
       // It was not ours to stop.
@@ -216,8 +216,8 @@ async function start(
     ready: () => said('Ctrl-C stops it.'),
     serverPids: () => childrenOf(child.pid!),
     credentialsOf: (firstName) => {
-      const email = /\S+@\S+/.exec(output.split('\n').find((line) => line.includes(`${firstName} `)) ?? '')?.[0];
-      const password = /password\s+(\S+)/.exec(output)?.[1];
+      const line = output.split('\n').find((candidate) => candidate.includes(`${firstName} `));
+      const [, email, password] = /(\S+@\S+)\s+(\S+)/.exec(line ?? '') ?? [];
       if (email === undefined || password === undefined) throw new Error(`no sign-in for ${firstName}:\n${output}`);
       return { email, password };
     },

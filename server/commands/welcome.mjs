@@ -1,19 +1,16 @@
-/** The demo people, in the order of the job; their passwords are of this data folder and stand nowhere else. */
-export const DEMO_PEOPLE = [
-  { name: 'Ines Halloran', email: 'ines@tansyquay.example', role: 'designer, shop admin' },
-  { name: 'Bo Tremaine', email: 'bo@tansyquay.example', role: 'installer' },
-  { name: 'Priya Castellane', email: 'priya@tansyquay.example', role: 'reviewer' },
-  { name: 'Walt Ostrander', email: 'walt@tansyquay.example', role: 'owner' },
-];
+import { readDemoSignIns } from './demo-sign-ins.mjs';
 
-export function printWelcome({ settings, database, secrets, dataFolder }) {
+/** Where it is, who can sign in, and how to end it. */
+export function printWelcome({ settings, database, demoFolder, dataFolder }) {
   const lines = ['', `Ampwright is ready at  ${settings.address}`, ''];
   if (database === undefined) {
-    lines.push('The database is that of DATABASE_URL; it has the people and vessels it has.');
+    lines.push('The database is that of DATABASE_URL, with the people and vessels that are in it.');
   } else {
-    lines.push('Demo sign-ins, all with the password  ' + secrets.demoPassword, '');
-    for (const { name, email, role } of DEMO_PEOPLE) lines.push(`  ${email.padEnd(26)}${name}, ${role}`);
-    lines.push('', `Mail that it sends can be read at  ${settings.address}/mailbox`);
+    lines.push('Demo sign-ins:');
+    for (const { name, email, password, role, admin } of readDemoSignIns(demoFolder)) {
+      lines.push(`  ${email.padEnd(26)}${password.padEnd(16)}${name}, ${role}${admin ? ' and shop admin' : ''}`);
+    }
+    if (!process.env.SMTP_URL) lines.push('', `Mail that it sends can be read at  ${settings.address}/mailbox`);
   }
   lines.push('', `Data and log: ${dataFolder}`, 'Ctrl-C stops it.', '');
   console.log(lines.join('\n'));
