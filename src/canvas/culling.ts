@@ -1,4 +1,5 @@
 import { useStore, type ReactFlowState } from '@xyflow/react';
+import { useMemo } from 'react';
 
 import type { Box } from '#shared/kinds/place.ts';
 import type { RunLayout } from '#shared/layout/sheet-layout.ts';
@@ -6,8 +7,10 @@ import type { RunLayout } from '#shared/layout/sheet-layout.ts';
 /** The part of the sheet in view, widened to whole cells, so that it changes only when a cell's border is crossed. */
 export function useSeenCells(): Box {
   const key = useStore(cellsKey);
-  const [cell, left, top, right, bottom] = key.split(' ').map(Number) as [number, number, number, number, number];
-  return { x: left * cell, y: top * cell, width: (right - left) * cell, height: (bottom - top) * cell };
+  return useMemo(() => {
+    const [cell, left, top, right, bottom] = key.split(' ').map(Number) as [number, number, number, number, number];
+    return { x: left * cell, y: top * cell, width: (right - left) * cell, height: (bottom - top) * cell };
+  }, [key]);
 }
 
 function cellsKey({ transform, width, height }: ReactFlowState): string {

@@ -2,9 +2,14 @@ import { memo } from 'react';
 
 import { boxOf, terminalsOf, type Point } from '#shared/kinds/place.ts';
 import { coreWidth } from '#shared/layout/core-width.ts';
+import { runColour } from '#shared/layout/run-colour.ts';
 import { runPath } from '#shared/layout/run-path.ts';
-import type { RunLayout, SheetLayout, TagLayout } from '#shared/layout/sheet-layout.ts';
+import type { RunLayout, SheetLayout } from '#shared/layout/sheet-layout.ts';
 import type { Design, Run } from '#shared/model/design.ts';
+
+import { screenInk } from '#symbols/ink.ts';
+import { DeviceTag } from '#symbols/sheet/device-tag.tsx';
+import { RunLabel } from '#symbols/sheet/run-label.tsx';
 
 import type { Selection } from './selection.ts';
 
@@ -51,7 +56,7 @@ export const SelectionMarks = memo(function SelectionMarks({
         const run = design.runs[id];
         const drawn = layout.runs[id];
         if (run === undefined || drawn === undefined) return null;
-        return <RunMarks key={id} run={run} drawn={drawn} mayEdit={mayEdit} />;
+        return <RunMarks key={id} run={run} drawn={drawn} colour={runColour(design, run)} mayEdit={mayEdit} />;
       })}
       {[...selection.devices].map((id) => {
         const device = design.devices[id];
@@ -61,7 +66,7 @@ export const SelectionMarks = memo(function SelectionMarks({
         return (
           <g key={id}>
             <rect className="chosen" x={box.x - 6} y={box.y - 6} width={box.width + 12} height={box.height + 12} />
-            {tag !== undefined && <ChosenTag tag={tag} />}
+            {tag !== undefined && <DeviceTag tag={tag} ink={screenInk} selected />}
           </g>
         );
       })}
@@ -72,17 +77,17 @@ export const SelectionMarks = memo(function SelectionMarks({
 function RunMarks({
   run,
   drawn,
+  colour,
   mayEdit,
 }: {
   readonly run: Run;
   readonly drawn: RunLayout;
+  readonly colour: string;
   readonly mayEdit: boolean;
 }) {
   const first = drawn.points[0];
   const last = drawn.points.at(-1);
   const label = drawn.label;
-  const text = [label?.text ?? run.mark ?? '', run.colour].filter(Boolean).join(' · ');
-  const width = text.length * 6.05 + 10;
   return (
     <>
       {first !== undefined && <EndGrip at={first} />}
@@ -95,38 +100,13 @@ function RunMarks({
             d={`M${bend.x} ${bend.y - 5}l5 5l-5 5l-5 -5Z`}
           />
         ))}
-      {label !== null && text !== '' && (
-        <g transform={`translate(${chosenLeft(label.x, width, label.anchor)} ${label.y - 11.5})`}>
-          <rect className="chosen-tag" width={width} height={16} />
-          <text className="chosen-text" x={5} y={11.5}>
-            {text}
-          </text>
-        </g>
-      )}
+      {label !== null && <RunLabel label={label} ink={screenInk} selectedColour={colour} />}
     </>
   );
 }
 
-function chosenLeft(x: number, width: number, anchor: 'start' | 'middle' | 'end'): number {
-  if (anchor === 'start') return x - 5;
-  return anchor === 'end' ? x - width + 5 : x - width / 2;
-}
-
 function EndGrip({ at }: { readonly at: Point }) {
   return <rect className="grip" x={at.x - 4} y={at.y - 4} width={8} height={8} />;
-}
-
-function ChosenTag({ tag }: { readonly tag: TagLayout }) {
-  const text = tag.lines[0] ?? '';
-  const width = text.length * 7 + 8;
-  return (
-    <g transform={`translate(${chosenLeft(tag.x, width - 2, tag.anchor)} ${tag.y - 11})`}>
-      <rect className="chosen-tag" width={width} height={15} />
-      <text className="chosen-mark" x={4} y={11.2}>
-        {text}
-      </text>
-    </g>
-  );
 }
 
 /** What the pointer is over: brackets and terminal names of a device, ringed and named ends of a run. */

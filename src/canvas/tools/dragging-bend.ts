@@ -1,8 +1,7 @@
 import { setBends } from '#shared/edits/bends.ts';
 import { snap } from '#src/canvas/grid.ts';
 
-import { isEscape } from './pointing-device.ts';
-import { IDLE, type Happening, type Outcome, type Tool, type World } from './tool.ts';
+import { IDLE, isEscape, type Happening, type Outcome, type Tool, type World } from './tool.ts';
 
 type Dragging = Extract<Tool, { is: 'dragging-bend' }>;
 

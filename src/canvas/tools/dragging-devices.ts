@@ -2,8 +2,7 @@ import type { Point } from '#shared/kinds/place.ts';
 import { moveDevices } from '#shared/edits/move-devices.ts';
 import { minus, snap } from '#src/canvas/grid.ts';
 
-import { isEscape } from './pointing-device.ts';
-import { IDLE, type Happening, type Outcome, type Tool, type World } from './tool.ts';
+import { IDLE, isEscape, type Happening, type Outcome, type Tool, type World } from './tool.ts';
 
 type Dragging = Extract<Tool, { is: 'dragging-devices' }>;
 

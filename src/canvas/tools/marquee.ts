@@ -1,8 +1,7 @@
 import { boxOf, type Box, type Point } from '#shared/kinds/place.ts';
 import { joinSelections, type Selection } from '#src/canvas/selection.ts';
 
-import { isEscape } from './pointing-device.ts';
-import { IDLE, type Happening, type Outcome, type Tool, type World } from './tool.ts';
+import { IDLE, isEscape, type Happening, type Outcome, type Tool, type World } from './tool.ts';
 
 type Spanning = Extract<Tool, { is: 'marquee' }>;
 

@@ -5,8 +5,7 @@ import type { Device } from '#shared/model/design.ts';
 import { snap } from '#src/canvas/grid.ts';
 import { selectDevice } from '#src/canvas/selection.ts';
 
-import { isEscape } from './pointing-device.ts';
-import { IDLE, type Armed, type Happening, type Outcome, type Tool, type World } from './tool.ts';
+import { IDLE, isEscape, type Armed, type Happening, type Outcome, type Tool, type World } from './tool.ts';
 
 type Placing = Extract<Tool, { is: 'placing' }>;
 

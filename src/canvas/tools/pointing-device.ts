@@ -1,7 +1,7 @@
 import { selectDevice, toggleSelected } from '#src/canvas/selection.ts';
 
 import { draggedBy } from './dragging-devices.ts';
-import { DRAG_PIXELS, IDLE, type Happening, type Outcome, type Tool, type World } from './tool.ts';
+import { DRAG_PIXELS, IDLE, isEscape, type Happening, type Outcome, type Tool, type World } from './tool.ts';
 
 type Pointing = Extract<Tool, { is: 'pointing-device' }>;
 
@@ -27,8 +27,4 @@ export function onPointingDevice(tool: Pointing, happening: Happening, world: Wo
     };
   }
   return { tool: happening.type === 'cancel' || isEscape(happening) ? IDLE : tool };
-}
-
-export function isEscape(happening: Happening): boolean {
-  return happening.type === 'key' && happening.key === 'Escape';
 }

@@ -3,8 +3,7 @@ import { snap } from '#src/canvas/grid.ts';
 import { distanceToLeg } from '#src/canvas/hit.ts';
 import { selectRun, toggleSelected } from '#src/canvas/selection.ts';
 
-import { isEscape } from './pointing-device.ts';
-import { DRAG_PIXELS, IDLE, type Happening, type Outcome, type Tool, type World } from './tool.ts';
+import { DRAG_PIXELS, IDLE, isEscape, type Happening, type Outcome, type Tool, type World } from './tool.ts';
 
 type Pointing = Extract<Tool, { is: 'pointing-run' }>;
 

@@ -1,7 +1,6 @@
 import { NOTHING_SELECTED } from '#src/canvas/selection.ts';
 
-import { isEscape } from './pointing-device.ts';
-import { DRAG_PIXELS, IDLE, type Happening, type Outcome, type Tool, type World } from './tool.ts';
+import { DRAG_PIXELS, IDLE, isEscape, type Happening, type Outcome, type Tool, type World } from './tool.ts';
 
 type Pointing = Extract<Tool, { is: 'pointing-sheet' }>;
 

@@ -1,8 +1,7 @@
 import { hitTerminal, CATCH_UNITS } from '#src/canvas/hit.ts';
 import { selectDevice, toggleSelected } from '#src/canvas/selection.ts';
 
-import { isEscape } from './pointing-device.ts';
-import { DRAG_PIXELS, IDLE, type Happening, type Outcome, type Tool, type World } from './tool.ts';
+import { DRAG_PIXELS, IDLE, isEscape, type Happening, type Outcome, type Tool, type World } from './tool.ts';
 
 type Pointing = Extract<Tool, { is: 'pointing-terminal' }>;
 

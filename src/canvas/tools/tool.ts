@@ -74,3 +74,7 @@ export interface Outcome {
 
 /** Pixels of a shaking hand that are no drag yet. */
 export const DRAG_PIXELS = 4;
+
+export function isEscape(happening: Happening): boolean {
+  return happening.type === 'key' && happening.key === 'Escape';
+}
