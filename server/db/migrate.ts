@@ -11,7 +11,9 @@ import mysql, { type RowDataPacket } from 'mysql2/promise';
 export async function migrateDatabase(url: string): Promise<void> {
   const connection = await mysql.createConnection({ uri: url, timezone: 'Z', connectTimeout: 10_000 });
   try {
-    const [rows] = await connection.query<RowDataPacket[]>("SELECT GET_LOCK(CONCAT('migrate-', DATABASE()), 120) AS got");
+    const [rows] = await connection.query<RowDataPacket[]>(
+      "SELECT GET_LOCK(CONCAT('migrate-', DATABASE()), 120) AS got",
+    );
     if (rows[0]?.['got'] !== 1) throw new Error('another process has been changing the tables for two minutes');
     await migrate(drizzle(connection), { migrationsFolder: MIGRATIONS });
   } finally {
