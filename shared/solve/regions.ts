@@ -1,0 +1,327 @@
+import type { FullBasis } from '#shared/model/defaults.ts';
+import type { Device, EntityId, Run } from '#shared/model/design.ts';
+
+import { canConduct, type Bank, type Circuits } from './circuits.ts';
+import { otherEnd, type ContactEdge, type NetworkEdge } from './network.ts';
+import { amountOf, ratingsOf } from './ratings.ts';
+import { Union } from './union.ts';
+
+/**
+ * What lies on one side of a run, up to the first protective devices. A region is what conductors and switches
+ * join with no protective device between; protection is judged region by region, each run by its two sides.
+ */
+export interface Side {
+  /** The nearest source of fault current that nothing protects on the way. */
+  readonly source?: Reach;
+  /** The nearest protective device, whichever way it feeds. */
+  readonly nearest?: Reach;
+  /** The first devices of greatest rating: all of them, and those that feed this region. */
+  readonly largest?: Device;
+  readonly feeding?: Device;
+  readonly hasBattery: boolean;
+  readonly hasStarter: boolean;
+}
+
+/** A way along the conductors. */
+export interface Reach {
+  readonly device: Device;
+  readonly lengthM: number;
+  /** Lengths that nobody has told yet count as nothing and are marked here. */
+  readonly isLengthKnown: boolean;
+  readonly covering: Covering;
+  readonly bank?: Bank;
+  readonly way: Way | undefined;
+}
+
+/** Worst first. */
+export type Covering = 'bare' | 'untold' | 'enclosed';
+
+export interface Way {
+  readonly run: Run;
+  readonly beyond: Way | undefined;
+}
+
+export interface Regions {
+  /** What lies on the two sides of a run: beyond its `from` end and beyond its `to` end. */
+  sidesOf(run: EntityId): { readonly from: Side; readonly to: Side } | undefined;
+  /** Whether a protective device is the first one in series with a battery. */
+  isMain(device: EntityId): boolean;
+  /** Protective devices ahead of a device, the nearest first, as far as one feeds the other. */
+  upstreamOf(device: EntityId): readonly EntityId[];
+}
+
+const NOTHING: Side = { hasBattery: false, hasStarter: false };
+
+export function regionsOf(circuits: Circuits, basis: FullBasis): Regions {
+  const { network } = circuits;
+  const regions = new Union(network.nodes.length);
+  const inner = network.edges.filter(isInner).toSorted((a, b) => lengthOf(a) - lengthOf(b) || a.index - b.index);
+  const isBranch = new Set<number>();
+  for (const edge of inner) if (regions.join(edge.a, edge.b)) isBranch.add(edge.index);
+
+  const gates = network.edges
+    .filter((edge) => isGate(edge))
+    .filter((gate) => regions.rootOf(gate.a) !== regions.rootOf(gate.b));
+  const gatesAt = new Map<number, ContactEdge[]>();
+  for (const gate of gates) {
+    for (const node of [gate.a, gate.b]) gatesAt.set(node, [...(gatesAt.get(node) ?? []), gate]);
+  }
+  const sourcesAt = (node: number) => unprotectedSourcesAt(circuits, basis, node);
+  const feeds = feedingGates(network.nodes.length, regions, gates, sourcesAt);
+
+  const ownSide = (node: number): Side => {
+    let side: Side = NOTHING;
+    for (const source of sourcesAt(node)) side = merge(side, source);
+    for (const gate of gatesAt.get(node) ?? []) {
+      const reach: Reach = {
+        device: gate.device,
+        lengthM: 0,
+        isLengthKnown: true,
+        covering: 'enclosed',
+        way: undefined,
+      };
+      const feeding = feeds.has(feedKey(gate, regions.rootOf(node))) ? gate.device : undefined;
+      side = merge(side, { nearest: reach, largest: gate.device, feeding, hasBattery: false, hasStarter: false });
+    }
+    for (const edge of network.edgesAt(node)) {
+      if (edge.type === 'load' && edge.device.kind === 'starter') side = merge(side, { ...NOTHING, hasStarter: true });
+      if (edge.type === 'source' && edge.element.type === 'battery' && circuits.netOf(node).side === 'return') {
+        side = merge(side, { ...NOTHING, hasBattery: true });
+      }
+    }
+    return side;
+  };
+
+  const messages = passMessages(circuits, isBranch, ownSide);
+  const mains = new Set<EntityId>();
+  for (const gate of gates) {
+    const besideBattery = [gate.a, gate.b].some((node) => messages.whole(node).source?.bank !== undefined);
+    if (besideBattery) mains.add(gate.device.id);
+  }
+
+  return {
+    sidesOf(runId) {
+      const edge = messages.edgeOf.get(runId);
+      return edge && { from: messages.side(edge, edge.a), to: messages.side(edge, edge.b) };
+    },
+    isMain: (device) => mains.has(device),
+    upstreamOf(deviceId) {
+      const ahead: EntityId[] = [];
+      const seen = new Set([deviceId]);
+      let gate = gates.find((each) => each.device.id === deviceId);
+      while (gate) {
+        const before: Device | undefined = [gate.a, gate.b]
+          .map((node) => messages.whole(node).feeding)
+          .find((device) => device && !seen.has(device.id));
+        if (!before) break;
+        seen.add(before.id);
+        ahead.push(before.id);
+        gate = gates.find((each) => each.device.id === before.id);
+      }
+      return ahead;
+    },
+  };
+}
+
+function isInner(edge: NetworkEdge): boolean {
+  return canConduct(edge) && !isGate(edge);
+}
+
+function isGate(edge: NetworkEdge): edge is ContactEdge {
+  return edge.type === 'contact' && edge.element.protective;
+}
+
+function lengthOf(edge: NetworkEdge): number {
+  return edge.type === 'run' ? (edge.run.lengthM ?? 0) : 0;
+}
+
+/** Batteries, and charging sources that say they are not self-limiting. */
+function unprotectedSourcesAt(circuits: Circuits, basis: FullBasis, node: number): Side[] {
+  return circuits.network.edgesAt(node).flatMap((edge): Side[] => {
+    if (edge.type !== 'source') return [];
+    const isUngroundedReturn = basis.dcSystem === 'ungrounded' && edge.b === node;
+    if (edge.a !== node && !isUngroundedReturn) return [];
+    const isBattery = edge.element.type === 'battery';
+    if (!isBattery && ratingsOf(edge.device).selfLimiting !== false) return [];
+    const bank = isBattery ? circuits.bankOf(edge.device.id) : undefined;
+    const source: Reach = {
+      device: edge.device,
+      lengthM: 0,
+      isLengthKnown: true,
+      covering: 'enclosed',
+      bank,
+      way: undefined,
+    };
+    return [{ source, hasBattery: isBattery, hasStarter: false }];
+  });
+}
+
+function feedKey(gate: ContactEdge, intoRegion: number): string {
+  return `${gate.index}>${intoRegion}`;
+}
+
+/** Through which protective devices, and into which region, current can come from a source. */
+function feedingGates(
+  nodeCount: number,
+  regions: Union,
+  gates: readonly ContactEdge[],
+  sourcesAt: (node: number) => readonly Side[],
+): ReadonlySet<string> {
+  const gatesOf = new Map<number, ContactEdge[]>();
+  for (const gate of gates) {
+    for (const node of [gate.a, gate.b]) {
+      const region = regions.rootOf(node);
+      gatesOf.set(region, [...(gatesOf.get(region) ?? []), gate]);
+    }
+  }
+  const feeds = new Set<string>();
+  const queue: { region: number; by: ContactEdge | undefined }[] = [];
+  const seen = new Set<number>();
+  for (let node = 0; node < nodeCount; node++) {
+    const region = regions.rootOf(node);
+    if (seen.has(region) || sourcesAt(node).length === 0) continue;
+    seen.add(region);
+    queue.push({ region, by: undefined });
+  }
+  const arrivals = new Map<number, number>();
+  for (const { region, by } of queue) {
+    const before = arrivals.get(region) ?? 0;
+    if (before >= 2) continue; // all its devices have been told by then
+    arrivals.set(region, before + 1);
+    for (const gate of gatesOf.get(region) ?? []) {
+      if (gate === by) continue;
+      const beyond = regions.rootOf(regions.rootOf(gate.a) === region ? gate.b : gate.a);
+      const key = feedKey(gate, beyond);
+      if (feeds.has(key)) continue;
+      feeds.add(key);
+      queue.push({ region: beyond, by: gate });
+    }
+  }
+  return feeds;
+}
+
+interface Messages {
+  readonly edgeOf: ReadonlyMap<EntityId, NetworkEdge>;
+  /** What lies beyond an edge on the side of one of its ends. */
+  side(edge: NetworkEdge, end: number): Side;
+  /** All that the region holds, seen from a node. */
+  whole(node: number): Side;
+}
+
+/** Two passes over the spanning trees of the regions: inwards to the root and out again. Linear in the network. */
+function passMessages(circuits: Circuits, isBranch: ReadonlySet<number>, ownSide: (node: number) => Side): Messages {
+  const { network } = circuits;
+  const order: number[] = [];
+  const parentEdge: (NetworkEdge | undefined)[] = network.nodes.map(() => undefined);
+  const seen = network.nodes.map(() => false);
+  for (const { index: root } of network.nodes) {
+    if (seen[root]) continue;
+    seen[root] = true;
+    const start = order.push(root) - 1;
+    for (let at = start; at < order.length; at++) {
+      for (const edge of network.edgesAt(order[at]!)) {
+        const to = otherEnd(edge, order[at]!);
+        if (!isBranch.has(edge.index) || seen[to]) continue;
+        seen[to] = true;
+        parentEdge[to] = edge;
+        order.push(to);
+      }
+    }
+  }
+
+  const own = network.nodes.map(({ index }) => ownSide(index));
+  // Below: what a node's own subtree holds. Above: what all the rest of the region holds, seen from the node's parent.
+  const below: Side[] = [...own];
+  for (const node of order.toReversed()) {
+    const edge = parentEdge[node];
+    if (!edge) continue;
+    const parent = otherEnd(edge, node);
+    below[parent] = merge(below[parent]!, extend(below[node]!, edge));
+  }
+  const above: Side[] = network.nodes.map(() => NOTHING);
+  for (const node of order) {
+    const up = parentEdge[node];
+    const children = network
+      .edgesAt(node)
+      .filter((edge) => isBranch.has(edge.index) && edge !== up && parentEdge[otherEnd(edge, node)] === edge);
+    const fromAbove = up ? extend(above[node]!, up) : NOTHING;
+    const parts = children.map((edge) => extend(below[otherEnd(edge, node)]!, edge));
+    const after: Side[] = [NOTHING];
+    for (const part of parts.toReversed()) after.push(merge(part, after.at(-1)!));
+    let before = merge(own[node]!, fromAbove);
+    children.forEach((edge, i) => {
+      above[otherEnd(edge, node)] = merge(before, after[parts.length - 1 - i]!);
+      before = merge(before, parts[i]!);
+    });
+  }
+
+  const whole = (node: number): Side => {
+    const up = parentEdge[node];
+    return up ? merge(below[node]!, extend(above[node]!, up)) : below[node]!;
+  };
+  return {
+    edgeOf: new Map(circuits.runs.map((edge) => [edge.run.id, edge])),
+    whole,
+    side(edge, end) {
+      const isLower = parentEdge[end] === edge;
+      if (isLower) return below[end]!;
+      const other = otherEnd(edge, end);
+      if (parentEdge[other] === edge) return above[other]!;
+      return whole(end); // a run that closes a ring: all of the region lies on either side
+    },
+  };
+}
+
+function extend(side: Side, edge: NetworkEdge): Side {
+  if (edge.type !== 'run') return side;
+  return { ...side, source: along(side.source, edge.run), nearest: along(side.nearest, edge.run) };
+}
+
+function along(reach: Reach | undefined, run: Run): Reach | undefined {
+  if (!reach) return undefined;
+  return {
+    ...reach,
+    lengthM: reach.lengthM + (run.lengthM ?? 0),
+    isLengthKnown: reach.isLengthKnown && run.lengthM !== undefined,
+    covering: worstCovering(reach.covering, coveringOf(run)),
+    way: { run, beyond: reach.way },
+  };
+}
+
+/** A core of a cable lies in its jacket. A link is a part of the assembly it was bought with. */
+export function coveringOf(run: Run): Covering {
+  if (run.cable !== undefined || (run.enclosed !== undefined && run.enclosed !== 'none')) return 'enclosed';
+  if (run.link && (run.lengthM ?? 0) === 0) return 'enclosed';
+  return run.enclosed === 'none' ? 'bare' : 'untold';
+}
+
+export function worstCovering(a: Covering, b: Covering): Covering {
+  if (a === 'bare' || b === 'bare') return 'bare';
+  return a === 'untold' || b === 'untold' ? 'untold' : 'enclosed';
+}
+
+function merge(a: Side, b: Side): Side {
+  if (a === NOTHING) return b;
+  if (b === NOTHING) return a;
+  return {
+    source: nearer(a.source, b.source),
+    nearest: nearer(a.nearest, b.nearest),
+    largest: greater(a.largest, b.largest),
+    feeding: greater(a.feeding, b.feeding),
+    hasBattery: a.hasBattery || b.hasBattery,
+    hasStarter: a.hasStarter || b.hasStarter,
+  };
+}
+
+function nearer(a: Reach | undefined, b: Reach | undefined): Reach | undefined {
+  if (!a || !b) return a ?? b;
+  if (a.lengthM !== b.lengthM) return a.lengthM < b.lengthM ? a : b;
+  return a.device.id <= b.device.id ? a : b;
+}
+
+function greater(a: Device | undefined, b: Device | undefined): Device | undefined {
+  if (!a || !b) return a ?? b;
+  const [ofA, ofB] = [a, b].map((device) => amountOf(ratingsOf(device), 'ratedA') ?? Infinity);
+  if (ofA !== ofB) return ofA! > ofB! ? a : b;
+  return a.id <= b.id ? a : b;
+}
