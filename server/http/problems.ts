@@ -23,7 +23,7 @@ export const answerNothingHere: RequestHandler = (_request: Request, response: R
   sendProblem(response, problemOf(new NotFound()));
 };
 
-export function sendProblem(response: Response, problem: Problem & { readonly reason?: string }): void {
+export function sendProblem(response: Response, problem: Problem): void {
   response
     .status(problem.status)
     .type('application/problem+json')

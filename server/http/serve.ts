@@ -53,7 +53,7 @@ export function serve<
 ): void {
   const answer: RequestHandler = async (request, response) => {
     const house = houseOf(request);
-    const caller = right === 'public' ? undefined : await house.signIn.readCaller(request);
+    const caller = right === 'public' ? undefined : await house.signIn.readCaller(request, response);
     if (right !== 'public' && caller === undefined) throw new NotSignedIn();
     const params = contract.params.safeParse(request.params);
     if (!params.success) throw new NotFound();

@@ -12,7 +12,6 @@ export const SIGN_IN_ADDRESSES = [
   { method: 'POST', path: '/api/auth/sign-up/email' },
   { method: 'POST', path: '/api/auth/sign-in/email' },
   { method: 'POST', path: '/api/auth/sign-out' },
-  { method: 'GET', path: '/api/auth/get-session' },
   { method: 'POST', path: '/api/auth/request-password-reset' },
   { method: 'POST', path: '/api/auth/reset-password' },
   { method: 'GET', path: '/api/auth/verify-email' },
@@ -48,14 +47,16 @@ function toWebRequest(request: ExpressRequest): Request {
     const value = request.get(name);
     if (value !== undefined) headers.set(name, value);
   }
-  const url = new URL(request.originalUrl, publicUrl);
+  const url = new URL(request.path, publicUrl);
+  // The one thing that comes by address. Where to go afterwards is for our pages to say, never for a link.
+  if (typeof request.query['token'] === 'string') url.searchParams.set('token', request.query['token']);
   if (request.method === 'GET') return new Request(url, { headers });
   headers.set('content-type', 'application/json');
   return new Request(url, { method: request.method, headers, body: JSON.stringify(request.body ?? {}) });
 }
 
 /** The package's answer as a problem of ours, with its own word as the reason. */
-function problemFrom(status: number, text: string): Problem & { reason?: string } {
+function problemFrom(status: number, text: string): Problem {
   const { code: reason, message } = parse(text);
   if (status === 404) return problemOf(new NotFound());
   const kind =

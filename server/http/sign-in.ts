@@ -3,7 +3,7 @@ import { betterAuth } from 'better-auth';
 import { drizzleAdapter } from 'better-auth/adapters/drizzle';
 import { APIError, createAuthMiddleware } from 'better-auth/api';
 import { fromNodeHeaders } from 'better-auth/node';
-import type { Request as ExpressRequest } from 'express';
+import type { Request as ExpressRequest, Response as ExpressResponse } from 'express';
 import type { Logger } from 'pino';
 
 import type { OpenDatabase } from '#server/db/connect.ts';
@@ -27,7 +27,8 @@ export interface Caller {
 export interface SignIn {
   /** Answers a request to one of the sign-in package's own addresses. */
   handle(request: Request): Promise<Response>;
-  readCaller(request: ExpressRequest): Promise<Caller | undefined>;
+  /** A session in use is made to last longer; the cookie that says so goes with the response. */
+  readCaller(request: ExpressRequest, response: ExpressResponse): Promise<Caller | undefined>;
   /** The cookies of a new session, for someone who has just set this password. */
   signInAgain(request: ExpressRequest, email: string, password: string): Promise<string[]>;
 }
@@ -46,9 +47,13 @@ export function openSignIn(db: OpenDatabase, configuration: Configuration, log: 
   const auth = makeAuth(db, configuration, log);
   return {
     handle: (request) => auth.handler(request),
-    async readCaller(request) {
+    async readCaller(request, response) {
       if (request.headers.cookie === undefined) return undefined;
-      const found = await auth.api.getSession({ headers: fromNodeHeaders(request.headers) });
+      const { response: found, headers } = await auth.api.getSession({
+        headers: fromNodeHeaders(request.headers),
+        returnHeaders: true,
+      });
+      for (const cookie of headers.getSetCookie()) response.append('Set-Cookie', cookie);
       if (found === null) return undefined;
       return {
         personId: found.user.id,
@@ -119,7 +124,6 @@ function makeAuth(db: OpenDatabase, configuration: Configuration, log: Logger) {
         '/request-password-reset': { window: 60, max: 10 },
         '/send-verification-email': { window: 60, max: 10 },
         '/reset-password': { window: 60, max: 20 },
-        '/get-session': false,
       },
     },
     advanced: {

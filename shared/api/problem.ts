@@ -20,6 +20,8 @@ export const Problem = z.object({
   detail: z.string(),
   /** The field of the body that is wrong: `conductor.size`. */
   field: z.string().optional(),
+  /** Of sign-in and its kin, why: `EMAIL_NOT_VERIFIED`, `INVALID_EMAIL_OR_PASSWORD`, `INVALID_TOKEN`, `TOO_MANY_TRIES` … */
+  reason: z.string().optional(),
   /** With `conflict` on a change: what stands there now. */
   conflicts: z
     .array(z.object({ path: z.array(z.string()), theirs: z.unknown(), by: z.string(), at: z.string() }))

@@ -94,14 +94,8 @@ async function ask(path: string, body: unknown): Promise<Asked> {
       body: JSON.stringify(body),
     });
     if (response.ok) return { ok: true, status: response.status, code: null, says: '' };
-    const copy = response.clone();
-    const problem = await readProblem(response);
-    const own = (await copy.json().catch(() => null)) as { code?: unknown; message?: unknown } | null;
-    const says =
-      typeof own?.message === 'string' && response.status < 429
-        ? `${own.message}.`.replace('..', '.')
-        : problem.message;
-    return { ok: false, status: response.status, code: typeof own?.code === 'string' ? own.code : null, says };
+    const { problem } = await readProblem(response);
+    return { ok: false, status: response.status, code: problem.reason ?? null, says: problem.detail };
   } catch (error) {
     if (error instanceof Unreachable) {
       return {
