@@ -1,4 +1,4 @@
-import { useMemo } from 'react';
+import { useMemo, useState } from 'react';
 
 import { replaceDesign } from '#shared/edits/replace-design.ts';
 import { readDesign } from '#shared/files/read-design.ts';
@@ -16,6 +16,8 @@ export function ReplaceDrawing({
 }) {
   const store = useOpenDesignStore();
   const read = useMemo(() => readDesign(file.text), [file.text]);
+
+  const [refused, setRefused] = useState<string | null>(null);
 
   if (!read.ok) {
     return (
@@ -54,14 +56,23 @@ export function ReplaceDrawing({
       title="Replace the drawing"
       lead={`${file.name} holds ${devices} devices and ${runs} runs. They come in the place of everything that is drawn now; undo brings it back.`}
     >
+      {refused !== null && (
+        <p className="said-wrong" role="alert">
+          {refused}
+        </p>
+      )}
       <div className="does">
         <Button onClick={onClose}>Cancel</Button>
         <Button
           look="go"
           onClick={() => {
             const { design: now, change } = store.getState();
-            change(`Replaced the drawing from ${file.name}`.slice(0, 200), replaceDesign(now, design));
-            onClose();
+            const edit = replaceDesign(now, design, `Replace the drawing from ${file.name}`.slice(0, 200));
+            if (edit.refused !== undefined) setRefused(edit.refused);
+            else {
+              change(edit.label, edit.patches);
+              onClose();
+            }
           }}
         >
           Replace the drawing
