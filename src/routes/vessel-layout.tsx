@@ -7,6 +7,7 @@ import type { VesselSummary } from '#shared/api/vessels.ts';
 import { basisOf } from '#shared/model/defaults.ts';
 import { DesignProvider } from '#src/design/design-provider.tsx';
 import { useOpenDesign } from '#src/design/open-design.ts';
+import { KeepingDialogs } from '#src/features/keeping/keeping-dialogs.tsx';
 import { IssueRevision } from '#src/features/revisions/issue-revision.tsx';
 import { VesselHead } from '#src/features/vessels/vessel-head.tsx';
 import { vesselQuery } from '#src/features/vessels/vessels-api.ts';
@@ -64,6 +65,7 @@ function VesselFrame({ me, vessel, isDrawing }: VesselContext & { readonly isDra
         action={may(vessel.role, 'issue-revision') && <IssueRevision vesselId={vessel.vesselId} primary={isDrawing} />}
       />
       <Outlet context={{ me, vessel } satisfies VesselContext} />
+      <KeepingDialogs />
     </div>
   );
 }
