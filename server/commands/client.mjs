@@ -21,7 +21,7 @@ export async function buildClient(say) {
     'The client did not build.',
     process.execPath,
     [join(ROOT, 'node_modules/vite/bin/vite.js'), 'build', '--outDir', beside, '--emptyOutDir', '--logLevel', 'warn'],
-    { env: { ...process.env, NODE_ENV: 'production' } },
+    { env: { ...process.env, NODE_ENV: 'production', NO_COLOR: '1', FORCE_COLOR: undefined } },
   );
   writeFileSync(join(beside, '.made-from'), wanted);
   rmSync(join(ROOT, 'dist'), { recursive: true, force: true });

@@ -15,6 +15,8 @@ import { seededRandom } from './seeded-random.ts';
 
 const KILLS = 20;
 const EDITORS = 4;
+/** The database more often than the server, which takes ten times as long to be back. */
+const VICTIMS = ['server', 'database', 'database', 'both'] as const;
 const SEED = 20_260_114;
 
 let folder: string;
@@ -47,6 +49,7 @@ test(`server, database or both die ${KILLS} times amid edits: nothing acknowledg
   const ledger = new Map<string, { readonly change: Change; readonly seq: number }>();
   let isOver = false;
   let refusals = 0;
+  let onAcknowledged = (): void => {};
 
   const editors = Array.from({ length: EDITORS }, async (_, editor) => {
     for (let edit = 0; !isOver; edit += 1) {
@@ -60,22 +63,28 @@ test(`server, database or both die ${KILLS} times amid edits: nothing acknowledg
         }
         ledger.set(change.id, { change, seq });
         isAcknowledged = true;
+        onAcknowledged();
       }
     }
   });
+  function acknowledged(count: number): Promise<void> {
+    const enough = ledger.size + count;
+    return new Promise((done) => {
+      onAcknowledged = () => {
+        if (ledger.size >= enough) done();
+      };
+    });
+  }
   async function askFor(change: Change): Promise<number | undefined> {
     const reply = await designer.tryCall(makeChange, { params, body: change });
     return reply?.seq;
   }
 
-  let acknowledgedBetween = 0;
   for (let kill = 0; kill < KILLS; kill += 1) {
-    const before = ledger.size;
-    const victims = (['server', 'database', 'both'] as const)[random.whole(3)]!;
-    await local.whenUp();
-    await pause(20 + random.whole(180));
+    const victims = VICTIMS[random.whole(VICTIMS.length)]!;
+    await acknowledged(1 + random.whole(15)); // so that each death falls amid edits, however slow the machine
+    await pause(random.whole(25));
     await local.kill(victims);
-    acknowledgedBetween += ledger.size > before ? 1 : 0;
     await local.startAgain();
   }
   isOver = true;
@@ -85,7 +94,6 @@ test(`server, database or both die ${KILLS} times amid edits: nothing acknowledg
   const last = await designer.call(getDesign, { params });
   console.log(`${ledger.size} changes acknowledged, ${refusals} sent again, ${log.length} in the log`);
 
-  expect(acknowledgedBetween, 'kills that fell among edits').toBeGreaterThan(KILLS / 2);
   expect(refusals, 'changes whose answer was lost').toBeGreaterThan(KILLS / 2);
   // Every acknowledged change is there exactly once, under the number that was told, and there are no others.
   expect(log.map((change) => change.id).toSorted()).toEqual([...ledger.keys()].toSorted());

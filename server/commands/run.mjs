@@ -30,7 +30,13 @@ export async function runOrStop(sentence, command, args, options) {
   if (/ENOSPC|No space left on device/.test(said)) {
     throw new Stopped(`The disk is full: ${sentence} Free some space and start again.`);
   }
-  throw new Stopped(`${sentence}\n${said.trim().split('\n').slice(-15).join('\n')}`);
+  throw new Stopped(`${sentence}\n${shorten(said)}`);
+}
+
+/** The beginning, where a compiler says what is wrong, and the end, where a package manager does. */
+function shorten(said) {
+  const lines = said.trim().split('\n');
+  return (lines.length <= 24 ? lines : [...lines.slice(0, 12), '…', ...lines.slice(-12)]).join('\n');
 }
 
 /** Runs one of our TypeScript commands. */

@@ -1,0 +1,31 @@
+import { readFileSync } from 'node:fs';
+
+import { analyse } from '#shared/rules/analyse.ts';
+import { readDesign } from '#shared/files/read-design.ts';
+
+/**
+ * `npm run --silent prove -- FILE`: the analysis of a design file as JSON. Exit 0: no must-fix finding is left that
+ * is not accepted; 1: some; 2: the file can't be read, with the reason on standard error.
+ */
+process.exitCode = prove(process.argv[2]);
+
+function prove(file: string | undefined): number {
+  if (file === undefined) return refuse('Name the design file: npm run prove -- FILE.ampwright.json');
+  let text: string;
+  try {
+    text = readFileSync(file, 'utf8');
+  } catch (error) {
+    return refuse(`${file}: ${error instanceof Error ? error.message : 'cannot be read'}`);
+  }
+  const read = readDesign(text);
+  if (!read.ok) return refuse(read.message);
+  const analysis = analyse(read.design);
+  process.stdout.write(`${JSON.stringify(analysis, null, 2)}\n`);
+  const isOpen = analysis.findings.some((finding) => finding.severity === 'must' && !finding.accepted);
+  return isOpen ? 1 : 0;
+}
+
+function refuse(reason: string): number {
+  process.stderr.write(`${reason}\n`);
+  return 2;
+}
