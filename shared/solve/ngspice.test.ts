@@ -82,7 +82,6 @@ function runNgspice({ branches, loads, ground }: Spelled) {
         ? `i_${name} ${at(from)} ${at(to)} dc ${amount}`
         : `b_${name} ${at(from)} ${at(to)} i=${amount}/max(v(${at(from)})-v(${at(to)}),6)`,
     ),
-    ...loads.map(({ from }) => `.nodeset v(${at(from)})=12`),
     '.options reltol=1e-9 abstol=1e-12 vntol=1e-12 itl1=500',
     '.control',
     'set numdgt=15',

@@ -37,7 +37,7 @@ export function generateDesign(wish: Wish): Design {
   const place = (id: string, kind: string, ratings: Record<string, unknown>, more: Partial<Device> = {}) => {
     devices[id] = { id, kind, mark: id.toUpperCase(), ratings, sheetId: 's1', x: 0, y: 0, ...more };
   };
-  /** The next free stud of a busbar; two studs are left for what comes last. */
+  /** The next free stud of a busbar; what finds none free shares the last. */
   const studOf = (busbar: string): End => {
     const stud = (used.get(busbar) ?? 0) + 1;
     used.set(busbar, stud);
@@ -105,6 +105,9 @@ export function generateDesign(wish: Wish): Design {
     wire({ device: `h${i}`, terminal: 'pos' }, studOf(`xp${Math.floor(random() * busbars)}`), true);
     wire({ device: `h${i}`, terminal: 'neg' }, studOf('xn0'), true);
     on[`h${i}`] = { on: true };
+  }
+  for (const [busbar, studs] of used) {
+    devices[busbar] = { ...devices[busbar]!, ratings: { ...devices[busbar]!.ratings, studs: Math.min(studs, 60) } };
   }
   return {
     format: 'ampwright-design',
