@@ -64,7 +64,7 @@ export interface MinimumCase {
 /** The smallest size the profile lets this run have; undefined where the run is exempt. */
 export function minimumSizeOf({ run, basis, nominalV, designCurrentA, isElectronics }: MinimumCase): Size | undefined {
   const minimum = MINIMUM_SIZE[basis.profile];
-  const isPigtail = run.lengthM !== undefined && run.lengthM < minimum.pigtailM;
+  const isPigtail = run.lengthM !== undefined && run.lengthM < minimum.pigtailM - 1e-9;
   if (isPigtail || run.link || run.enclosed === 'enclosure') return undefined;
   if (isElectronics && designCurrentA < ELECTRONICS_BELOW_A && nominalV < ELECTRONICS_BELOW_V) return undefined;
   const { awg, metric } = isSheathed(run) ? minimum.sheathed : minimum.separate;

@@ -1,0 +1,109 @@
+import { WORK, type Design, type Device, type Run } from '#shared/model/design.ts';
+import { INSULATION_TEMPERATURES, sizeOf } from '#shared/model/size.ts';
+
+/**
+ * The design with all taken out that no reader of a file would let through, so that a document from anywhere can be
+ * worked out. What is sound stays the same object.
+ */
+export function readable(design: Design): Design {
+  const given: Partial<Design> = isRecord(design) ? design : {};
+  const devices = only(given.devices, isDevice);
+  return {
+    ...given,
+    format: 'ampwright-design',
+    version: 1,
+    basis: isRecord(given.basis) ? withFiniteNumbers(given.basis) : {},
+    sheets: only(given.sheets, isRecord),
+    zones: mapped(only(given.zones, isRecord), withFiniteNumbers),
+    devices,
+    runs: mapped(only(given.runs, isRun), tidyRun),
+    modes: only(given.modes, isRecord),
+    notes: only(given.notes, isRecord),
+    accepted: isRecord(given.accepted) ? given.accepted : {},
+  } as Design;
+}
+
+function isRecord(value: unknown): value is Record<string, unknown> {
+  return typeof value === 'object' && value !== null && !Array.isArray(value);
+}
+
+function only<T>(family: Readonly<Record<string, T>> | undefined, isSound: (value: unknown) => boolean) {
+  if (!isRecord(family)) return {};
+  const entries = Object.entries(family as Record<string, T>);
+  const sound = entries.filter(([id, entity]) => isSound(entity) && (entity as { id?: unknown }).id === id);
+  return sound.length === entries.length ? (family as Record<string, T>) : Object.fromEntries(sound);
+}
+
+function mapped<T extends object>(family: Record<string, T>, tidy: (entity: T) => T): Record<string, T> {
+  const entries = Object.entries(family).map(([id, entity]) => [id, tidy(entity)] as const);
+  return entries.every(([id, entity]) => family[id] === entity) ? family : Object.fromEntries(entries);
+}
+
+function isDevice(value: unknown): boolean {
+  if (!isRecord(value)) return false;
+  const { kind, ratings, mark, name, symbol } = value as Partial<Device>;
+  return typeof kind === 'string' && isRecord(ratings) && [mark, name, symbol].every(isTextOrNothing);
+}
+
+function isRun(value: unknown): boolean {
+  if (!isRecord(value)) return false;
+  const { from, to, mark } = value as Partial<Run>;
+  return [from, to].every((end) => isRecord(end) && typeof end.device === 'string') && isTextOrNothing(mark);
+}
+
+function isTextOrNothing(value: unknown): boolean {
+  return value === undefined || typeof value === 'string';
+}
+
+function tidyRun(run: Run): Run {
+  const conductor: Partial<Run['conductor']> = isRecord(run.conductor) ? run.conductor : {};
+  const isSound =
+    isAmount(run.lengthM) &&
+    isAmount(run.milliohm) &&
+    typeof conductor.size === 'string' &&
+    sizeOf(conductor.size) !== undefined &&
+    isCount(conductor.parallel) &&
+    isCount(conductor.bundled) &&
+    isInsulation(conductor.insulationC) &&
+    (run.work === undefined || WORK.includes(run.work)) &&
+    isTextOrNothing(run.colour) &&
+    isTextOrNothing(run.cable) &&
+    (run.zoneIds === undefined || Array.isArray(run.zoneIds));
+  if (isSound) return run;
+  const size = typeof conductor.size === 'string' && sizeOf(conductor.size) ? conductor.size : '20 AWG';
+  return {
+    ...run,
+    lengthM: isAmount(run.lengthM) ? run.lengthM : undefined,
+    milliohm: isAmount(run.milliohm) ? run.milliohm : undefined,
+    conductor: {
+      size,
+      insulationC: isInsulation(conductor.insulationC) ? conductor.insulationC : undefined,
+      parallel: isCount(conductor.parallel) ? conductor.parallel : undefined,
+      bundled: isCount(conductor.bundled) ? conductor.bundled : undefined,
+    },
+    colour: isTextOrNothing(run.colour) ? run.colour : undefined,
+    cable: isTextOrNothing(run.cable) ? run.cable : undefined,
+    zoneIds: Array.isArray(run.zoneIds) ? run.zoneIds : undefined,
+    work: run.work !== undefined && WORK.includes(run.work) ? run.work : undefined,
+  };
+}
+
+function isAmount(value: unknown): boolean {
+  return value === undefined || (typeof value === 'number' && Number.isFinite(value) && value >= 0);
+}
+
+function isCount(value: unknown): boolean {
+  return value === undefined || (Number.isInteger(value) && (value as number) >= 1);
+}
+
+function isInsulation(value: unknown): boolean {
+  return value === undefined || INSULATION_TEMPERATURES.some((known) => known === value);
+}
+
+/** A number that is none falls back to its default. */
+function withFiniteNumbers<T extends object>(entity: T): T {
+  const broken = Object.entries(entity).filter(([, value]) => typeof value === 'number' && !Number.isFinite(value));
+  if (broken.length === 0) return entity;
+  const names = new Set(broken.map(([name]) => name));
+  return Object.fromEntries(Object.entries(entity).filter(([name]) => !names.has(name))) as T;
+}

@@ -1,0 +1,66 @@
+import { workOf } from '#shared/model/defaults.ts';
+import type { Device } from '#shared/model/design.ts';
+import { defineRule } from '#shared/rules/rule.ts';
+import { highestVoltageAt } from '#shared/solve/highest-voltage.ts';
+import { interruptNeedOf } from '#shared/solve/interrupting.ts';
+import type { Proof } from '#shared/solve/proof.ts';
+import { amountOf, callOf, isProtective, ratingsOf } from '#shared/solve/ratings.ts';
+import { formatA } from '#shared/units/current.ts';
+import { formatV } from '#shared/units/voltage.ts';
+import { listOf } from '#shared/rules/mending.ts';
+
+/**
+ * The ratings that safety hangs on are told: what a fuse or breaker can interrupt, and at what voltage.
+ *
+ * Why: what is not known is not passed. New work has its data sheet, so there it must be told; on what already is
+ * aboard it should be found out. The finding says the value the rating would have to have.
+ * Source: ABYC E-11 and 33 CFR 183.455, which ask for both.
+ * Says nothing about a rating that is told and too low: the rules of `protection/` do.
+ */
+export const ratingUnknown = defineRule({
+  id: 'record/rating-unknown',
+  title: 'A rating that safety hangs on is not told',
+  severity: 'must',
+  sources: {
+    'abyc-e11': { title: 'ABYC E-11 and 33 CFR 183', clause: 'overcurrent protection; 183.455(d)' },
+    'iso-13297': { title: 'ISO 13297:2020', clause: 'overcurrent protection (from memory)' },
+  },
+  message: '{device} does not say {missing}.',
+
+  *check(proof) {
+    for (const device of proof.devices) {
+      const unknown = unknownRatings(proof, device);
+      if (unknown.length === 0) continue;
+      yield {
+        subject: { device: device.id },
+        severity: workOf(device) === 'existing' ? 'should' : 'must',
+        figures: {
+          device: callOf(device),
+          missing: listOf(unknown.map(({ says }) => says)),
+          ...Object.fromEntries(unknown.map(({ name, value }) => [name, value])),
+        },
+      };
+    }
+  },
+});
+
+interface Unknown {
+  readonly name: string;
+  readonly value: number;
+  readonly says: string;
+}
+
+function unknownRatings(proof: Proof, device: Device): Unknown[] {
+  if (!isProtective(device)) return [];
+  const ratings = ratingsOf(device);
+  const unknown: Unknown[] = [];
+  if (amountOf(ratings, 'interruptA') === undefined) {
+    const value = interruptNeedOf(proof, device)?.computedA ?? 0;
+    unknown.push({ name: 'interruptA', value, says: `what it can interrupt (it has to be ${formatA(value)} or more)` });
+  }
+  if (amountOf(ratings, 'maxV') === undefined) {
+    const value = highestVoltageAt(proof, device);
+    unknown.push({ name: 'maxV', value, says: `up to what voltage (it has to be ${formatV(value)} or more)` });
+  }
+  return unknown;
+}
