@@ -77,7 +77,8 @@ function endProtection(
 ): EndProtection | undefined {
   const { source, feeding } = here;
   if (source) {
-    const isInsideBank = !there.nearest && source.bank !== undefined && there.source?.bank === source.bank;
+    const isInsideBank =
+      !there.nearest && source.bank !== undefined && [there.source?.bank, there.stacked].includes(source.bank);
     if (isInsideBank) return undefined;
     if (!there.nearest) return { fromEnd, how: 'none', source: source.device, ahead: source.way?.run.id };
     return {

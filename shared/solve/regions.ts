@@ -18,6 +18,8 @@ export interface Side {
   /** The first devices of greatest rating: all of them, and those that feed this region. */
   readonly largest?: Device;
   readonly feeding?: Device;
+  /** A battery that stands on another with its negative here: the link between them is inside their bank. */
+  readonly stacked?: Bank;
   readonly hasBattery: boolean;
   readonly hasStarter: boolean;
 }
@@ -84,6 +86,9 @@ export function regionsOf(circuits: Circuits, basis: FullBasis): Regions {
       side = merge(side, { nearest: reach, largest: gate.device, feeding, hasBattery: false, hasStarter: false });
     }
     for (const edge of network.edgesAt(node)) {
+      if (edge.type === 'source' && edge.b === node && circuits.netOf(node).side === 'fed') {
+        side = merge(side, { ...NOTHING, stacked: circuits.bankOf(edge.device.id) });
+      }
       if (edge.type === 'load' && edge.device.kind === 'starter') side = merge(side, { ...NOTHING, hasStarter: true });
       if (edge.type === 'source' && edge.element.type === 'battery' && circuits.netOf(node).side === 'return') {
         side = merge(side, { ...NOTHING, hasBattery: true });
@@ -308,6 +313,7 @@ function merge(a: Side, b: Side): Side {
     nearest: nearer(a.nearest, b.nearest),
     largest: greater(a.largest, b.largest),
     feeding: greater(a.feeding, b.feeding),
+    stacked: a.stacked ?? b.stacked,
     hasBattery: a.hasBattery || b.hasBattery,
     hasStarter: a.hasStarter || b.hasStarter,
   };

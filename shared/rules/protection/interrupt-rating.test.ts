@@ -54,7 +54,7 @@ testRule(interruptRating, {
       given: fuseThatBreaks(1400),
       says: ['F1 can break 1,400 A; a short circuit sends 2,977 A through it.'],
       remedies: ['Use a class T fuse of 15 A for F1'],
-      figures: { computedA: 2976.7, admittedA: 1500, position: 'main' },
+      figures: { computedA: 2976.744, admittedA: 1500, position: 'main' },
     },
     {
       // E-11 Table V-A: 650 CCA or less, main device 1,500 A.
