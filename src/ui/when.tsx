@@ -10,7 +10,7 @@ export function When({ at }: { readonly at: string | number }) {
   const then = new Date(at);
   return (
     <time dateTime={then.toISOString()} title={sayExactly(then)}>
-      {sayAgo(then, new Date(Math.max(now, Date.now() - 20_000)))}
+      {sayAgo(then, new Date(now))}
     </time>
   );
 }

@@ -38,7 +38,6 @@ export function DropSteps({
   const step = roundStep(endShare);
   const ticks = Array.from({ length: Math.floor(endShare / step) + 1 }, (_, i) => i * step);
   const limitX = at(drop.limit * nominalV);
-  let soFar = 0;
 
   return (
     <>
@@ -57,8 +56,9 @@ export function DropSteps({
       >
         {steps.map(({ id, volts }, i) => {
           const run = design.runs[id];
-          const x = at(soFar);
-          soFar += volts;
+          const before = steps.slice(0, i).reduce((sum, step) => sum + step.volts, 0);
+          const after = before + volts;
+          const x = at(before);
           const y = i * ROW;
           return (
             <g key={`${id}-${i}`}>
@@ -75,10 +75,10 @@ export function DropSteps({
                 className={id === runId ? 'bar' : 'share'}
                 x={x}
                 y={y + 3}
-                width={Math.max(0.5, at(soFar) - x)}
+                width={Math.max(0.5, at(after) - x)}
                 height={9}
               />
-              {i < steps.length - 1 && <path className="tick" d={`M${at(soFar)} ${y + 12}v5`} />}
+              {i < steps.length - 1 && <path className="tick" d={`M${at(after)} ${y + 12}v5`} />}
               <text className="figure" x={WIDTH} y={y + 11} textAnchor="end">
                 {formatNumber(volts, 3)} V
               </text>

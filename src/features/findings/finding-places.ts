@@ -32,8 +32,7 @@ export function placeOfFinding(design: Design, finding: Finding): FindingPlace {
 export function addressOnSheet(vesselId: string, finding: Finding, place: FindingPlace): string | null {
   const id = finding.subject.run ?? finding.subject.device;
   if (id === undefined || place.sheetId === null) return null;
-  const kind = finding.subject.run === undefined ? 'device' : 'run';
-  return `/vessels/${vesselId}/draw/${place.sheetId}?${kind}=${encodeURIComponent(id)}`;
+  return `/vessels/${vesselId}/draw?sheet=${place.sheetId}&select=${encodeURIComponent(id)}`;
 }
 
 export function nameOfMode(design: Design, modeId: string): string {

@@ -18,7 +18,7 @@ export function CableCut({
     .filter((piece) => piece.lengthM > 0)
     .sort((a, b) => b.lengthM - a.lengthM);
   if (boughtM <= 0 || pieces.length === 0) return null;
-  let from = 0;
+  const froms = startsOf(pieces.map((piece) => piece.lengthM));
   return (
     <svg
       className="cable-cut"
@@ -29,8 +29,7 @@ export function CableCut({
       <rect x={0.5} y={2} width={287} height={16} fill="url(#hatch-ink)" stroke="var(--ink-1)" />
       {pieces.map(({ mark, lengthM }, i) => {
         const width = (lengthM / boughtM) * 288;
-        const x = from;
-        from += width;
+        const x = ((froms[i] ?? 0) / boughtM) * 288;
         return (
           <g key={`${mark}-${i}`}>
             <rect x={x} y={2} width={width} height={16} fill="var(--sheet)" stroke="var(--ink-1)" />
@@ -44,4 +43,9 @@ export function CableCut({
       })}
     </svg>
   );
+}
+
+/** Where each of several lengths laid end to end begins. */
+function startsOf(lengths: readonly number[]): number[] {
+  return lengths.map((_length, i) => lengths.slice(0, i).reduce((sum, length) => sum + length, 0));
 }

@@ -64,7 +64,7 @@ function DeviceLine({ vesselId, device }: { readonly vesselId: string; readonly 
   return (
     <tr>
       <td className="mono">
-        <Link to={`/vessels/${vesselId}/draw/${device.sheetId}?device=${encodeURIComponent(device.id)}`}>
+        <Link to={`/vessels/${vesselId}/draw?sheet=${device.sheetId}&select=${encodeURIComponent(device.id)}`}>
           {device.mark ?? 'device'}
         </Link>
       </td>
@@ -94,7 +94,9 @@ function RunLine({
   return (
     <tr>
       <td className="mono">
-        <Link to={`/vessels/${vesselId}/draw/${sheetId}?run=${encodeURIComponent(run.id)}`}>{run.mark ?? 'run'}</Link>
+        <Link to={`/vessels/${vesselId}/draw?sheet=${sheetId}&select=${encodeURIComponent(run.id)}`}>
+          {run.mark ?? 'run'}
+        </Link>
       </td>
       <td>
         {markOf(run.from.device)} to {markOf(run.to.device)}

@@ -57,7 +57,7 @@ export function useRenameVessel(vesselId: string) {
 }
 
 export function useDuplicateVessel(vesselId: string) {
-  return useVesselMutation((_: void) => call(duplicateVessel, { params: { vesselId } }));
+  return useVesselMutation<void>(() => call(duplicateVessel, { params: { vesselId } }));
 }
 
 const MOVES = {
