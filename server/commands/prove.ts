@@ -1,5 +1,6 @@
 import { readFileSync } from 'node:fs';
 
+import { partsList } from '#shared/lists/parts-list.ts';
 import { analyse } from '#shared/rules/analyse.ts';
 import { readDesign } from '#shared/files/read-design.ts';
 
@@ -18,8 +19,8 @@ function prove(file: string | undefined): number {
     return refuse(`${file}: ${error instanceof Error ? error.message : 'cannot be read'}`);
   }
   const read = readDesign(text);
-  if (!read.ok) return refuse(read.message);
-  const analysis = analyse(read.design);
+  if (!read.ok) return refuse(`${read.path}: ${read.reason}`);
+  const analysis = analyse(read.design, { partsOf: partsList });
   process.stdout.write(`${JSON.stringify(analysis, null, 2)}\n`);
   const isOpen = analysis.findings.some((finding) => finding.severity === 'must' && !finding.accepted);
   return isOpen ? 1 : 0;

@@ -1,6 +1,7 @@
 import type { Analysis } from '#shared/model/analysis.ts';
 import type { Design } from '#shared/model/design.ts';
 import { applyPatches, type Patch } from '#shared/model/patch.ts';
+import { partsList } from '#shared/lists/parts-list.ts';
 import { analyse } from '#shared/rules/analyse.ts';
 
 /** What the page tells the check: a whole design once, then what changed of it. `turn` numbers the states. */
@@ -33,6 +34,6 @@ function check(): void {
   isDue = false;
   if (design === null) return;
   const startedMs = performance.now();
-  const answer: CheckAnswer = { turn, analysis: analyse(design), tookMs: 0 };
+  const answer: CheckAnswer = { turn, analysis: analyse(design, { partsOf: partsList }), tookMs: 0 };
   self.postMessage({ ...answer, tookMs: performance.now() - startedMs });
 }
