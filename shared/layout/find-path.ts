@@ -35,6 +35,8 @@ export function findPath(grid: RouteGrid, from: PathEnd, to: PathEnd): number[] 
   for (;;) {
     const state = takeCheapest(search);
     if (state === -1) return [from.node, to.node];
+    if (search.closed[state] === search.stamp) continue;
+    search.closed[state] = search.stamp;
     const node = state >> 2;
     const heading = (state & 3) as Direction;
     if (node === to.node) return trace(search, state);
@@ -95,6 +97,7 @@ function stepCost(grid: RouteGrid, node: number, ahead: number, heading: Directi
 interface Search {
   stamp: number;
   seen: Int32Array;
+  closed: Int32Array;
   spent: Float64Array;
   before: Int32Array;
   heapState: Int32Array;
@@ -105,6 +108,7 @@ interface Search {
 const scratch: Search = {
   stamp: 0,
   seen: new Int32Array(0),
+  closed: new Int32Array(0),
   spent: new Float64Array(0),
   before: new Int32Array(0),
   heapState: new Int32Array(1024),
@@ -115,6 +119,7 @@ const scratch: Search = {
 function beginSearch(states: number): Search {
   if (scratch.seen.length < states) {
     scratch.seen = new Int32Array(states);
+    scratch.closed = new Int32Array(states);
     scratch.spent = new Float64Array(states);
     scratch.before = new Int32Array(states);
     scratch.stamp = 0;

@@ -31,16 +31,38 @@ export function placeLabel(
 ): LabelLayout | null {
   if (points.length < 2) return null;
   const text = labelText(run);
-  const measures = { text, code, width: labelWidth(text, code), off: coreWidth(run) / 2 + OUTLINE + LABEL.clear };
+  const off = coreWidth(run) / 2 + OUTLINE + LABEL.clear;
   const segments = segmentsOf(nearEnd ? [...points].reverse() : points);
-  let best: { label: LabelLayout; cost: number } | undefined;
-  for (const { label, cost: dislike } of candidates(segments, measures)) {
-    const cost = conflict(space, label.box) + (label.leader ? leaderConflict(space, label.leader, run.id) : 0);
-    if (cost < 0.5 && dislike < 1) return label;
-    if (best === undefined || cost + dislike < best.cost) best = { label, cost: cost + dislike };
-    if (best.cost <= dislike) break;
+  const measures = { text, code, width: labelWidth(text, code), off };
+  // without its code letters it may still find room beside the run
+  const bare = { text, code: '', width: labelWidth(text, ''), off };
+  const beside =
+    bestLabel(space, run, besideRun(segments, measures)) ??
+    (code === '' ? null : bestLabel(space, run, besideRun(segments, bare)));
+  if (beside !== null && beside.cost < 1) return beside.label;
+  const longest = [...segments].sort((a, b) => b.length - a.length).slice(0, 2);
+  const aside = bestLabel(
+    space,
+    run,
+    longest.flatMap((segment) => onLeader(segment, bare)),
+    beside?.cost,
+  );
+  return (aside ?? beside)?.label ?? null;
+}
+
+/** The first candidate that is free, else the one that hides least; null when none hides less than `below`. */
+function bestLabel(space: Space, run: Run, candidates: Iterable<Candidate>, below = Infinity): Candidate | null {
+  let best: Candidate | null = null;
+  let least = below;
+  for (const { label, cost: dislike } of candidates) {
+    let cost = dislike + conflict(space, label.box);
+    if (cost < least && label.leader) cost += leaderConflict(space, label.leader, run.id);
+    if (cost >= least) continue;
+    best = { label, cost };
+    least = cost;
+    if (cost === dislike) break;
   }
-  return best?.label ?? null;
+  return best;
 }
 
 /** The code letters at the end away from the label, where the run is long enough to need them again. */
@@ -124,7 +146,7 @@ function segmentsOf(points: readonly Point[]): Segment[] {
   return points.slice(1).map((to, i) => ({ from: points[i]!, to, length: distance(points[i]!, to) }));
 }
 
-function* candidates(segments: readonly Segment[], measures: Measures): Generator<Candidate> {
+function* besideRun(segments: readonly Segment[], measures: Measures): Generator<Candidate> {
   for (const [i, segment] of segments.entries()) {
     if (segment.from.x === segment.to.x) yield* besideUpright(segment, measures, i * 0.05, 'start');
     else yield* overLevel(segment, measures, i * 0.05, 'above');
@@ -133,7 +155,6 @@ function* candidates(segments: readonly Segment[], measures: Measures): Generato
     if (segment.from.x === segment.to.x) yield* besideUpright(segment, measures, 0.3 + i * 0.05, 'end');
     else yield* overLevel(segment, measures, 0.4 + i * 0.05, 'below');
   }
-  for (const segment of segments) yield* onLeader(segment, measures);
 }
 
 /** The label's middle on multiples of 8 along the run, so that neighbours share a baseline. */
@@ -171,21 +192,18 @@ function* overLevel(segment: Segment, measures: Measures, cost: number, side: 'a
 }
 
 /** Off the run's middle, up and to the right first, then all round and further out. */
-function* onLeader(segment: Segment, measures: Measures): Generator<Candidate> {
+function onLeader(segment: Segment, measures: Measures): Candidate[] {
   const at = { x: (segment.from.x + segment.to.x) / 2, y: (segment.from.y + segment.to.y) / 2 };
-  let cost = 1;
-  for (const out of [16, 24, 32, 44, 56, 72, 96]) {
-    for (const [dx, dy] of AROUND) {
+  return [16, 24, 32, 44, 56, 72].flatMap((out, ring) =>
+    AROUND.map(([dx, dy], i) => {
       const x = at.x + dx * out;
       const y = at.y + dy * out;
-      const anchor = dx > 0 ? 'start' : dx < 0 ? 'end' : 'start';
       const left = dx === 0 ? x - measures.width / 2 : x;
-      const label = labelAt(left, y + 3.5, anchor, measures);
+      const label = labelAt(left, y + 3.5, dx < 0 ? 'end' : 'start', measures);
       const foot = { x: dx > 0 ? x - 2 : dx < 0 ? x + 2 : x, y: dy === 0 ? y : dy < 0 ? y + 5 : y - 5 };
-      cost += 0.02;
-      yield { label: { ...label, leader: [foot, at] }, cost };
-    }
-  }
+      return { label: { ...label, leader: [foot, at] as const }, cost: 1 + ring * 0.2 + i * 0.02 };
+    }),
+  );
 }
 
 const AROUND = [
@@ -213,7 +231,7 @@ function labelAt(x: number, y: number, anchor: 'start' | 'end', { text, code, wi
 function leaderConflict(space: Space, [foot, at]: readonly [Point, Point], runId: string): number {
   const length = Math.hypot(at.x - foot.x, at.y - foot.y);
   let sum = 0;
-  for (let along = 2; along < length - HOP_RADIUS; along += 4) {
+  for (let along = 2; along < length - HOP_RADIUS; along += 6) {
     const x = foot.x + ((at.x - foot.x) * along) / length;
     const y = foot.y + ((at.y - foot.y) * along) / length;
     sum += conflict(space, { x: x - 0.5, y: y - 0.5, width: 1, height: 1 }, runId);

@@ -10,11 +10,11 @@ import { routeRun } from './route.ts';
 import { addCost, COST, type RouteGrid } from './route-grid.ts';
 import { runColour } from './run-colour.ts';
 import { sheetDevicesOf, sheetRunsOf, type SheetRun } from './run-ends.ts';
-import type { CodeLayout, LabelLayout, RunLayout, SheetLayout, StubLayout, TagLayout } from './sheet-layout.ts';
-import { gridOf, spaceOf, takeRunLayout, takeWaysOut, WEIGHT } from './sheet-scene.ts';
-import { grow, take, type Space } from './space.ts';
+import type { CodeLayout, LabelLayout, RunLayout, SheetLayout, StubLayout } from './sheet-layout.ts';
+import { gridOf, spaceOf, takeRunLayout, takeWaysOut } from './sheet-scene.ts';
+import { grow, take, WEIGHT, type Space } from './space.ts';
 import { routeStub } from './stubs.ts';
-import { placeTag } from './tags.ts';
+import { placeTags } from './tags.ts';
 
 /**
  * Everything of a sheet in its place: tags beside their devices, runs round both, hops where runs cross, and labels
@@ -30,29 +30,23 @@ export function layoutSheet(design: Design, sheetId: EntityId, previous?: SheetL
 
   const waysOut = spaceOf(design, sheet, devices);
   takeWaysOut(waysOut, runs);
-  for (const device of devices) {
-    if (device.kind === 'busbar') continue;
-    const tag = placeTag(waysOut, device);
-    if (tag === null) continue;
-    take(waysOut, grow(tag.box, 1), WEIGHT.text, device.id);
-    addCost(grid, tag.box, COST.text);
-  }
+  const unbarred = devices.filter((device) => device.kind !== 'busbar');
+  for (const tag of placeTags(waysOut, unbarred).values()) addCost(grid, tag.box, COST.text);
   const routes = routeAll(design, grid, runs);
   const hops = findHops(runs.map(({ run }) => routes.get(run.id)!.points));
 
   const space = spaceOf(design, sheet, devices);
   runs.forEach(({ run }, i) => takeRunLayout(space, run, { ...routes.get(run.id)!, hops: hops[i]! }));
-  const tags: Record<EntityId, TagLayout> = {};
-  for (const device of devices) {
-    const tag = placeTag(space, device);
-    if (tag === null) continue;
-    tags[device.id] = tag;
-    take(space, grow(tag.box, 1), WEIGHT.text, device.id);
-  }
+  const tags = Object.fromEntries(placeTags(space, devices));
   const laid: Record<EntityId, RunLayout> = {};
   runs.forEach((sheetRun, i) => {
     const { points, stubs } = routes.get(sheetRun.run.id)!;
-    laid[sheetRun.run.id] = labelled(design, space, sheetRun, { points, stubs, hops: hops[i]! });
+    laid[sheetRun.run.id] = labelled(design, space, sheetRun, {
+      points,
+      stubs,
+      hops: hops[i]!,
+      colour: runColour(design, sheetRun.run),
+    });
   });
   for (const { run } of runs) {
     const layout = laid[run.id]!;
@@ -88,18 +82,19 @@ export function labelled(
   design: Design,
   space: Space,
   { run, from }: SheetRun,
-  route: Route & { readonly hops: readonly Point[] },
+  { points, stubs, hops, colour }: Route & Pick<RunLayout, 'hops' | 'colour'>,
 ): RunLayout {
-  const code = run.link === true ? '' : colourCode(runColour(design, run), basisOf(design).profile);
-  const label: LabelLayout | null = placeLabel(space, run, code, route.points, from === null);
-  if (label !== null) take(space, grow(label.box, 1), WEIGHT.text);
-  return { runId: run.id, points: route.points, hops: route.hops, label, code: null, stubs: route.stubs };
+  const code = run.link === true ? '' : colourCode(colour, basisOf(design).profile);
+  const label: LabelLayout | null = placeLabel(space, run, code, points, from === null);
+  if (label !== null) take(space, grow(label.box, 2), WEIGHT.text);
+  return { runId: run.id, colour, points, hops, label, code: null, stubs };
 }
 
 export function coded(space: Space, design: Design, runId: EntityId, layout: RunLayout): CodeLayout | null {
   const run = design.runs[runId];
   if (run === undefined || layout.stubs.length > 0) return null;
-  const code = placeCode(space, run, layout.label?.code ?? '', layout.points, layout.label);
+  const letters = run.link === true ? '' : colourCode(layout.colour, basisOf(design).profile);
+  const code = placeCode(space, run, letters, layout.points, layout.label);
   if (code !== null) take(space, grow(code.box, 1), WEIGHT.text);
   return code;
 }

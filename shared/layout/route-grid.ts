@@ -19,8 +19,8 @@ export interface RouteGrid {
 export const STEP = 8;
 
 export const COST = {
-  bend: 3,
-  crossing: 6,
+  bend: 5,
+  crossing: 7,
   /** On top of another run. */
   overlap: 150,
   /** Through a corner, an end or a terminal that is not the run's own. */
@@ -35,6 +35,7 @@ export const COST = {
   sideways: 8,
   backwards: 60,
   offSheet: 500,
+  nearFrame: 3,
 } as const;
 
 export function makeGrid(width: number, height: number): RouteGrid {
@@ -98,8 +99,9 @@ export function addRun(grid: RouteGrid, points: readonly Point[]): void {
 export function addOffSheet(grid: RouteGrid, frame: Box, keepClear: readonly Box[]): void {
   for (let node = 0; node < grid.cost.length; node++) {
     const { x, y } = pointOf(grid, node);
-    const isOff = x <= frame.x || y <= frame.y || x >= frame.x + frame.width || y >= frame.y + frame.height;
-    if (isOff) grid.cost[node]! += COST.offSheet;
+    const inset = Math.min(x - frame.x, frame.x + frame.width - x, y - frame.y, frame.y + frame.height - y);
+    if (inset <= 0) grid.cost[node]! += COST.offSheet;
+    else if (inset < 2 * STEP) grid.cost[node]! += COST.nearFrame;
   }
   for (const box of keepClear) addCost(grid, box, COST.offSheet);
 }

@@ -4,12 +4,13 @@ import { findHops } from './hops.ts';
 import { keepIdentity } from './keep-identity.ts';
 import { coded, labelled, routeAll } from './layout-sheet.ts';
 import { addCost, addRun, COST } from './route-grid.ts';
+import { runColour } from './run-colour.ts';
 import { sheetDevicesOf, sheetRunsOf } from './run-ends.ts';
-import type { RunLayout, SheetLayout, TagLayout } from './sheet-layout.ts';
-import { gridOf, spaceOf, takeRunLayout, WEIGHT } from './sheet-scene.ts';
-import { grow, take } from './space.ts';
+import type { RunLayout, SheetLayout } from './sheet-layout.ts';
+import { gridOf, spaceOf, takeRunLayout } from './sheet-scene.ts';
+import { grow, take, WEIGHT } from './space.ts';
 import { flagBox } from './stubs.ts';
-import { placeTag } from './tags.ts';
+import { placeTags } from './tags.ts';
 
 /**
  * Only the given runs anew, with the tags of the devices at their ends, while something is dragged: the others keep
@@ -47,7 +48,6 @@ export function routeRuns(
     const stubs = routes.get(run.id)?.stubs ?? kept!.stubs;
     takeRunLayout(space, run, { points: pointsOf(run.id), hops: hops[i]!, stubs });
   });
-  const tags: Record<EntityId, TagLayout> = { ...layout.tags };
   for (const { run } of staying) {
     const label = layout.runs[run.id]!.label;
     if (label !== null) take(space, grow(label.box, 1), WEIGHT.text);
@@ -55,13 +55,8 @@ export function routeRuns(
   for (const [id, tag] of Object.entries(layout.tags)) {
     if (!touched.has(id)) take(space, grow(tag.box, 1), WEIGHT.text, id);
   }
-  for (const device of devices) {
-    if (!touched.has(device.id)) continue;
-    const tag = placeTag(space, device);
-    if (tag === null) continue;
-    tags[device.id] = tag;
-    take(space, grow(tag.box, 1), WEIGHT.text, device.id);
-  }
+  const moved = devices.filter((device) => touched.has(device.id));
+  const tags = { ...layout.tags, ...Object.fromEntries(placeTags(space, moved)) };
   const laid: Record<EntityId, RunLayout> = {};
   runs.forEach((sheetRun, i) => {
     const { run } = sheetRun;
@@ -70,7 +65,11 @@ export function routeRuns(
       laid[run.id] = { ...layout.runs[run.id]!, hops: hops[i]! };
       return;
     }
-    const fresh = labelled(design, space, sheetRun, { ...route, hops: hops[i]! });
+    const fresh = labelled(design, space, sheetRun, {
+      ...route,
+      hops: hops[i]!,
+      colour: layout.runs[run.id]?.colour ?? runColour(design, run),
+    });
     laid[run.id] = { ...fresh, code: coded(space, design, run.id, fresh) };
   });
   return keepIdentity({ runs: laid, tags }, layout);

@@ -12,6 +12,8 @@ export interface SheetLayout {
 
 export interface RunLayout {
   readonly runId: EntityId;
+  /** One of the document's colours, or two joined by `/`. */
+  readonly colour: string;
   /** Square corners from end to end; for a run to another sheet, from its end on this sheet to the flag. */
   readonly points: readonly Point[];
   /** Points on the run where it hops over an earlier one. */

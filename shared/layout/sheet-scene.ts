@@ -9,13 +9,10 @@ import type { SheetRun } from './run-ends.ts';
 import { HOP_RADIUS } from './run-path.ts';
 import { flagBox } from './stubs.ts';
 import type { RunLayout, StubLayout } from './sheet-layout.ts';
-import { grow, makeSpace, segmentBox, take, takeRun, type Space } from './space.ts';
+import { grow, makeSpace, segmentBox, take, takeRun, WEIGHT, type Space } from './space.ts';
 import { textWidth, wrapText } from './text-width.ts';
 
 export const NOTE = { size: 9, line: 11, width: 160 };
-
-/** How bad it is for a label or tag to stand on each thing. */
-export const WEIGHT = { device: 20, text: 12, run: 8, flag: 14, frame: 40, zone: 1 };
 
 /** The sheet before anything is routed: its devices, notes and zones in the way of runs. */
 export function gridOf(design: Design, sheet: Sheet, devices: readonly Device[]): RouteGrid {
@@ -28,6 +25,7 @@ export function gridOf(design: Design, sheet: Sheet, devices: readonly Device[])
     for (const terminal of terminals) addTerminal(grid, terminal);
   }
   for (const note of notesOf(design, sheet.id)) addCost(grid, note, COST.text);
+  for (const name of zoneNamesOf(design, sheet.id)) addCost(grid, name, COST.text);
   return grid;
 }
 
@@ -47,7 +45,7 @@ export function spaceOf(design: Design, sheet: Sheet, devices: readonly Device[]
     cautionBox(sheet),
   ];
   for (const edge of edges) take(space, edge, WEIGHT.frame);
-  for (const device of devices) take(space, grow(placeOf(device).box, 1), WEIGHT.device, device.id);
+  for (const device of devices) take(space, grow(placeOf(device).inked, 1), WEIGHT.device, device.id);
   for (const note of notesOf(design, sheet.id)) take(space, note, WEIGHT.text);
   for (const zone of Object.values(design.zones)) {
     const { sheetId, x, y, width: w, height: h } = zone;
@@ -59,8 +57,8 @@ export function spaceOf(design: Design, sheet: Sheet, devices: readonly Device[]
       { x, y: y + h },
     ];
     takeRun(space, [...corners, corners[0]!], 0.5, WEIGHT.zone, zone.id);
-    take(space, zoneNameBox({ x, y, name: zone.name }), WEIGHT.text, zone.id);
   }
+  for (const name of zoneNamesOf(design, sheet.id)) take(space, name, WEIGHT.text);
   return space;
 }
 
@@ -107,6 +105,11 @@ export function notesOf(design: Design, sheetId: EntityId): Box[] {
     });
 }
 
-export function zoneNameBox({ x, y, name }: { x: number; y: number; name: string }): Box {
-  return { x: x + 6, y: y + 3, width: textWidth(name, 9.5) + 40, height: 13 };
+/** Where the names of zones stand, low under their upper left corner. */
+function zoneNamesOf(design: Design, sheetId: EntityId): Box[] {
+  return Object.values(design.zones).flatMap(({ sheetId: on, x, y, name }) =>
+    on === sheetId && x !== undefined && y !== undefined
+      ? [{ x: x + 6, y: y + 3, width: textWidth(name, 9.5) + 40, height: 13 }]
+      : [],
+  );
 }

@@ -13,6 +13,9 @@ export interface Taken {
   readonly owner?: string;
 }
 
+/** How bad it is for a label or tag to stand on each thing. */
+export const WEIGHT = { device: 20, text: 12, run: 8, flag: 14, frame: 40, zone: 1 };
+
 const CELL = 64;
 const STRIDE = 4096;
 
@@ -43,14 +46,22 @@ export function takeRun(
 /** How bad it would be to stand on `box`: nothing is 0. */
 export function conflict(space: Space, box: Box, except?: string): number {
   let sum = 0;
-  const counted = new Set<Taken>();
-  eachCell(box, (key) => {
-    for (const taken of space.cells.get(key) ?? []) {
-      if (counted.has(taken) || (except !== undefined && taken.owner === except) || !overlaps(taken.box, box)) continue;
-      counted.add(taken);
-      sum += taken.weight;
+  const left = cellOf(box.x);
+  const top = cellOf(box.y);
+  const right = cellOf(box.x + box.width);
+  const bottom = cellOf(box.y + box.height);
+  for (let row = top; row <= bottom; row++) {
+    for (let column = left; column <= right; column++) {
+      const cell = space.cells.get(row * STRIDE + column);
+      if (cell === undefined) continue;
+      for (const taken of cell) {
+        if (!overlaps(taken.box, box) || (except !== undefined && taken.owner === except)) continue;
+        // what spans several cells counts in the first one that both have
+        if (column !== Math.max(left, cellOf(taken.box.x)) || row !== Math.max(top, cellOf(taken.box.y))) continue;
+        sum += taken.weight;
+      }
     }
-  });
+  }
   return sum;
 }
 

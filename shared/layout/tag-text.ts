@@ -2,10 +2,14 @@ import type { Device } from '#shared/model/design.ts';
 
 /** What stands beside a device: its mark, its name, its rating. At most three lines. */
 export function tagLines(device: Device): string[] {
+  const { kind } = device;
+  const mark = device.mark?.trim() ?? '';
   const rating = ratingLines(device);
   const name = device.name?.trim();
+  // a bar has its tag on one line, over its end
+  if (kind === 'busbar') return [mark, [name, ...rating].filter((part) => part).join(', ')];
   const rest = name ? [name, rating.join(' ')] : rating;
-  return [device.mark?.trim() ?? '', ...rest.filter((line) => line !== '')].slice(0, 3);
+  return [mark, ...rest.filter((line) => line !== '')].slice(0, 3);
 }
 
 /** The figures by which the trade calls the thing: 250 A class T, 12.8 V 280 Ah. */

@@ -3,45 +3,95 @@ import type { Device } from '#shared/model/design.ts';
 
 import { placeOf } from './device-place.ts';
 import type { TagLayout } from './sheet-layout.ts';
-import { conflict, type Space } from './space.ts';
+import { conflict, grow, take, WEIGHT, type Space } from './space.ts';
 import { tagLines } from './tag-text.ts';
 import { monoWidth, textWidth } from './text-width.ts';
 
 export const TAG = { markSize: 11.5, textSize: 9.5, line: 11, gap: 8, ascent: 9, descent: 3, afterMark: 4 };
 
-/** The tag of a device on the first place that is free, else on the one that hides least. */
-export function placeTag(space: Space, device: Device): TagLayout | null {
-  const lines = tagLines(device);
-  if (lines.every((line) => line === '')) return null;
+/**
+ * A tag for every device on the first of its places that is free, else where it hides least. Who has the fewest free
+ * places chooses first, so that a device with room all round does not take its neighbour's only one.
+ */
+export function placeTags(space: Space, devices: readonly Device[]): Map<string, TagLayout> {
+  const waiting = devices.flatMap((device) => {
+    const lines = tagLines(device);
+    if (lines.every((line) => line === '')) return [];
+    const places = candidates(device, lines);
+    const free = places.filter((tag) => conflict(space, tag.box, device.id) < 1).length;
+    return [{ device, places, free }];
+  });
+  const tags = new Map<string, TagLayout>();
+  for (const { device, places } of waiting.sort((a, b) => a.free - b.free)) {
+    const tag = leastHiding(space, device, places);
+    if (tag === undefined) continue;
+    tags.set(device.id, tag);
+    take(space, grow(tag.box, 2), WEIGHT.text, device.id);
+  }
+  return tags;
+}
+
+function leastHiding(space: Space, device: Device, places: readonly TagLayout[]): TagLayout | undefined {
   let best: { tag: TagLayout; cost: number } | undefined;
-  for (const [i, tag] of candidates(device, lines).entries()) {
-    const cost = conflict(space, tag.box, device.id) + i * 0.01;
+  for (const [i, tag] of places.entries()) {
+    const cost = conflict(space, tag.box, device.id) + i * 0.001;
     if (cost < 1) return tag;
     if (best === undefined || cost < best.cost) best = { tag, cost };
   }
-  return best?.tag ?? null;
+  return best?.tag;
 }
 
 function candidates(device: Device, lines: readonly string[]): TagLayout[] {
-  const { box, terminals } = placeOf(device);
-  const isLevel = terminals.every((terminal) => terminal.sides.every((side) => side === 'left' || side === 'right'));
+  const { inked: box, terminals } = placeOf(device);
   if (device.kind === 'busbar' || device.kind === 'terminal') return barCandidates(device, box, lines);
-  const beside = [0, -11, 11, -22, 22].flatMap((dy) => [
-    besideTag(device, box, lines, 'right', dy),
-    besideTag(device, box, lines, 'left', dy),
-  ]);
-  const over = [0, 8, -8, 16, -16, 24, -24].flatMap((dx) => [
+  const isLevel = terminals.every((terminal) => terminal.sides.every((side) => side === 'left' || side === 'right'));
+  const narrow = narrower(lines);
+  const beside = (texts: readonly string[], steps: readonly number[], gap: number) =>
+    steps.flatMap((dy) => [
+      besideTag(device, box, texts, 'right', dy, gap),
+      besideTag(device, box, texts, 'left', dy, gap),
+    ]);
+  const over = [0, 8, -8, 16, -16, 24, -24, 40, -40].flatMap((dx) => [
     overTag(device, box, lines, 'below', dx),
     overTag(device, box, lines, 'above', dx),
   ]);
-  return isLevel ? [...beside.slice(0, 2), ...over, ...beside.slice(2)] : [...beside, ...over];
+  const near = beside(lines, [0, -11, 11, -22, 22], TAG.gap);
+  const far = [16, 24, 40, 56].flatMap((gap) => [
+    ...beside(lines, [0, -16, 16, -32, 32], gap),
+    ...(narrow ? beside(narrow, [0, -16, 16, -32, 32], gap) : []),
+  ]);
+  const slim = narrow ? beside(narrow, [0, -11, 11, -22, 22], TAG.gap) : [];
+  return isLevel
+    ? [...near.slice(0, 2), ...over, ...near.slice(2), ...slim, ...far]
+    : [...near, ...slim, ...over, ...far];
+}
+
+/** The words under the mark broken anew into two lines as short as they can be; null where that gains nothing. */
+function narrower(lines: readonly string[]): string[] | null {
+  const [mark = '', ...rest] = lines;
+  const words = rest.join(', ').split(' ');
+  let best: { pair: string[]; width: number } | undefined;
+  for (let i = 1; i < words.length; i++) {
+    const pair = [words.slice(0, i).join(' '), words.slice(i).join(' ')];
+    const width = Math.max(...pair.map((line) => textWidth(line, TAG.textSize)));
+    if (best === undefined || width < best.width) best = { pair, width };
+  }
+  const now = Math.max(0, ...rest.map((line) => textWidth(line, TAG.textSize)));
+  return best !== undefined && best.width < now - 4 ? [mark, ...best.pair] : null;
 }
 
 /** Right of the symbol, or left of it and ranged right; its middle on the symbol's. */
-function besideTag(device: Device, box: Box, lines: readonly string[], side: 'left' | 'right', dy: number): TagLayout {
+function besideTag(
+  device: Device,
+  box: Box,
+  lines: readonly string[],
+  side: 'left' | 'right',
+  dy: number,
+  gap: number = TAG.gap,
+): TagLayout {
   const height = lines.length * TAG.line;
   const y = box.y + box.height / 2 - height / 2 + TAG.ascent + dy;
-  const x = side === 'right' ? box.x + box.width + TAG.gap : box.x - TAG.gap;
+  const x = side === 'right' ? box.x + box.width + gap : box.x - gap;
   return tagAt(device, lines, x, y, side === 'right' ? 'start' : 'end', false);
 }
 

@@ -1,6 +1,5 @@
 import { paperSize } from '#shared/layout/paper.ts';
 import { placeOf } from '#shared/layout/device-place.ts';
-import { runColour } from '#shared/layout/run-colour.ts';
 import { sheetDevicesOf, sheetRunsOf } from '#shared/layout/run-ends.ts';
 import type { SheetLayout } from '#shared/layout/sheet-layout.ts';
 import type { Design, EntityId } from '#shared/model/design.ts';
@@ -34,7 +33,7 @@ export function SheetDrawing({ design, sheetId, layout, ink, titleBlock, inRevie
   const devices = sheetDevicesOf(design, sheetId);
   const runs = sheetRunsOf(design, sheetId).flatMap(({ run }) => {
     const drawn = layout.runs[run.id];
-    return drawn === undefined ? [] : [{ run, drawn, colour: runColour(design, run) }];
+    return drawn === undefined ? [] : [{ run, drawn, colour: drawn.colour }];
   });
   return (
     <g>

@@ -93,7 +93,7 @@ function Field({ x, y, width, caption, value, size, ink }: FieldProps) {
         y={y + (size === 'title' ? 23 : 21.5)}
         fontFamily={size === 'mono' ? ink.monospace : ink.text}
         fontSize={fitted}
-        fontWeight={size === 'title' ? 600 : 500}
+        fontWeight={size === 'title' ? 600 : size === 'mono' ? 500 : 400}
         fill={ink.ink1}
       >
         {value}
