@@ -7,6 +7,7 @@ import { defineConfig } from '@playwright/test';
 
 // Chosen once by the first process that reads this file; the workers inherit it.
 process.env['E2E_PORT'] ??= String(await freePort());
+process.env['E2E_RUNNER'] ??= String(process.pid);
 process.env['E2E_FOLDER'] ??= mkdtempSync(join(tmpdir(), 'ampwright-e2e-'));
 const address = `http://127.0.0.1:${process.env['E2E_PORT']}`;
 

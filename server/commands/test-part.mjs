@@ -35,7 +35,8 @@ function runLimited(part, env) {
     child.stderr.on('data', (data) => (said += data));
     const limit = setTimeout(() => {
       late = true;
-      endGroup(child, 'SIGKILL');
+      endGroup(child, 'SIGTERM');
+      setTimeout(() => running.has(child) && endGroup(child, 'SIGKILL'), 15_000).unref();
     }, part.limitS * 1000);
     const finish = (code, signal) => {
       clearTimeout(limit);
