@@ -1,6 +1,7 @@
 import type { ErrorRequestHandler, Request, RequestHandler, Response } from 'express';
 
 import type { Problem } from '#shared/api/problem.ts';
+import { errnoOf } from '#server/db/transaction.ts';
 import { Conflict, Invalid, NotFound, Refusal, Unavailable } from '#server/refusals.ts';
 
 import { houseOf } from './house.ts';
@@ -55,6 +56,7 @@ const UNEXPECTED: Problem = {
 /** Express's and the body parser's own errors carry a status; a database that is away is no fault of the request. */
 function refusalOf(error: unknown): Refusal | undefined {
   if (error instanceof Refusal) return error;
+  if (UNKEEPABLE.has(errnoOf(error) ?? 0)) return new Invalid('It holds text that can not be kept.');
   if (isDatabaseAway(error)) return new Unavailable('The database does not answer just now. Try again in a moment.');
   const status = error instanceof Error ? (error as Error & { status?: unknown }).status : undefined;
   if (typeof status !== 'number' || status < 400 || status > 499) return undefined;
@@ -62,6 +64,9 @@ function refusalOf(error: unknown): Refusal | undefined {
   if (status === 404) return new NotFound();
   return new Invalid('The request can not be read.', undefined, status === 415 ? 415 : 400);
 }
+
+/** Half a character (4025: JSON that MariaDB finds invalid; 1366) and what is too long for its column (1406). */
+const UNKEEPABLE: ReadonlySet<number> = new Set([4025, 1366, 1406]);
 
 const AWAY: ReadonlySet<string> = new Set([
   'ECONNREFUSED',

@@ -59,6 +59,7 @@ export async function checkReferences(
   others: OthersChanges,
   seq: number,
 ): Promise<void> {
+  await refuseParentCycles(tx, vesselId, before, after);
   const missing = [
     ...(await findMissing(tx, vesselId, before, after)),
     ...(await findLeftBehind(tx, vesselId, before, after)),
@@ -74,16 +75,16 @@ export async function checkReferences(
   });
   const path = `${first.family}.${first.entityId}.${first.field}`;
   const what =
-    first.terminal === undefined || !first.isThere
-      ? `${first.toFamily}.${first.toId}`
-      : `terminal ${first.terminal} of ${first.toId}`;
+    first.terminal !== undefined && first.isThere
+      ? `terminal ${first.terminal}, which ${first.toId} does not have`
+      : `${first.toFamily.slice(0, -1)} ${first.toId}, which is not there`;
   const leavesRunWithoutDevice = missing.some(
     (naming) => naming.family === 'runs' && naming.toFamily === 'devices' && !naming.isThere,
   );
   if (conflicts.length > 0 || leavesRunWithoutDevice) {
-    throw new Conflict(`${path}: ${what} is not there.`, { conflicts, seq });
+    throw new Conflict(`${path}: names ${what}.`, { conflicts, seq });
   }
-  throw new Invalid(`${path}: ${what} is not there`, path);
+  throw new Invalid(`${path}: names ${what}`, path);
 }
 
 type Missing = Naming & { readonly isThere: boolean };
@@ -158,6 +159,33 @@ async function findLostTerminals(
     }
   }
   return lost;
+}
+
+/** A panel in itself, at once or by way of others. */
+async function refuseParentCycles(
+  tx: Database,
+  vesselId: string,
+  before: TouchedRows,
+  after: TouchedRows,
+): Promise<void> {
+  const parentOf = async (id: string) => {
+    const known = after.families.devices;
+    const body = known.has(id) ? known.get(id) : (await readEntities(tx, vesselId, 'devices', [id])).get(id);
+    return (body as Device | undefined)?.parent;
+  };
+  for (const id of changedIds(before, after, 'devices')) {
+    const was = before.families.devices.get(id) as Device | undefined;
+    const is = after.families.devices.get(id) as Device | undefined;
+    if (is?.parent === undefined || is.parent === was?.parent) continue;
+    const seen = new Set<string>();
+    for (let at: string | undefined = is.parent; at !== undefined && !seen.has(at); at = await parentOf(at)) {
+      if (at === id) {
+        const path = `devices.${id}.parent`;
+        throw new Invalid(`${path}: must not lead back to the device itself`, path);
+      }
+      seen.add(at);
+    }
+  }
 }
 
 async function namingsOf(tx: Database, vesselId: string, after: TouchedRows, row: ReferenceRow): Promise<Naming[]> {

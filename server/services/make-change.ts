@@ -49,17 +49,15 @@ export async function applyChange(
   const seq = row.seq + 1;
   await writeRows(tx, vesselId, seq, before, after);
   await checkReferences(tx, vesselId, before, after, others, row.seq);
-  await tx
-    .insert(changeLog)
-    .values({
-      vesselId,
-      seq,
-      changeId: change.id,
-      label: change.label,
-      patches: change.patches,
-      personId,
-      at: new Date(),
-    });
+  await tx.insert(changeLog).values({
+    vesselId,
+    seq,
+    changeId: change.id,
+    label: change.label,
+    patches: change.patches,
+    personId,
+    at: new Date(),
+  });
   return { seq };
 }
 

@@ -11,13 +11,18 @@ import {
   Sheet,
   Vessel,
   Zone,
+  type Device,
   type Family,
 } from '#shared/model/design.ts';
 import { applyPatches, type Patch } from '#shared/model/patch.ts';
+import { findReservedKey } from '#shared/files/read-design.ts';
+import { firstOf, refusalOf } from '#shared/files/refusal.ts';
 import { DeviceFile } from '#shared/kinds/design-file.ts';
 import type { Database } from '#server/db/connect.ts';
 import { readEntities, readFamily, type DesignRow } from '#server/db/design-queries.ts';
 import { Invalid } from '#server/refusals.ts';
+
+import { terminalNamesOf } from './entity-references.ts';
 
 /** The part of a design that some patches touch: what it has one of, and the entities they name. Absent is undefined. */
 export interface TouchedRows {
@@ -31,7 +36,12 @@ export function checkPaths(patches: readonly Patch[]): void {
   patches.forEach((patch, i) => {
     const [root, id] = patch.path as [string, ...string[]];
     const field = `patches.${i}.path`;
-    if (patch.path.includes('__proto__')) throw new Invalid('__proto__ is no key of a design.', field);
+    for (const key of patch.path) {
+      if (findReservedKey({ [key]: null }, []) !== null)
+        throw new Invalid(`${key} is not a key that a design may have.`, field);
+    }
+    const reserved = findReservedKey(patch.value, []);
+    if (reserved !== null) throw new Invalid(`${reserved.path.join('.')} ${reserved.reason}`, `patches.${i}.value`);
     if (patch.op === 'set' && patch.value === undefined)
       throw new Invalid('Nothing to set was given.', `patches.${i}.value`);
     if (root === 'vessel') return;
@@ -85,9 +95,10 @@ export function checkShapes(before: TouchedRows, after: TouchedRows): void {
       const body = after.families[family].get(id);
       if (body === undefined) continue;
       checkShape(SHAPES[family], body, [family, id]);
-      if (family !== 'accepted' && (body as { id: string }).id !== id) {
-        throw new Invalid(`${family}.${id}.id: must equal its key`, `${family}.${id}.id`);
-      }
+      const more = family === 'accepted' ? undefined : findUnfit(family, id, body);
+      if (more === undefined) continue;
+      const field = [family, id, ...more.path].join('.');
+      throw new Invalid(`${field}: ${more.reason}`, field);
     }
   }
 }
@@ -104,10 +115,29 @@ const SHAPES: Readonly<Record<Family, z.ZodType>> = {
 };
 
 function checkShape(shape: z.ZodType, value: unknown, at: readonly string[]): void {
-  const issue = shape.safeParse(value).error?.issues[0];
-  if (issue === undefined) return;
-  const path = [...at, ...issue.path].join('.');
-  throw new Invalid(`${path}: ${issue.message}`, path);
+  const issues = shape.safeParse(value).error?.issues;
+  if (issues === undefined) return;
+  const { path, reason } = firstOf(
+    issues.flatMap((issue) => refusalOf(issue, value)),
+    value,
+  );
+  const field = [...at, ...path].join('.');
+  throw new Invalid(`${field}: ${reason}`, field);
+}
+
+/** What a schema can not say of one entity by itself; a file that has it is refused as well. */
+function findUnfit(family: Family, id: string, body: unknown): { path: string[]; reason: string } | undefined {
+  if ((body as { id: string }).id !== id) return { path: ['id'], reason: `must be ${id}, the key it stands under` };
+  if (family !== 'devices') return undefined;
+  const device = body as Device;
+  const { ratedA, ratedW } = device.ratings;
+  if (device.kind === 'load' && ratedA === undefined && ratedW === undefined) {
+    return { path: ['ratings', 'ratedA'], reason: 'is missing: a load has ratedA or ratedW' };
+  }
+  if (device.mountedOn?.device === id) return { path: ['mountedOn', 'device'], reason: 'must be another device' };
+  const terminals = terminalNamesOf(device);
+  const stud = Object.keys(device.studs ?? {}).find((name) => !terminals.has(name));
+  return stud === undefined ? undefined : { path: ['studs', stud], reason: 'is not a terminal of this device' };
 }
 
 async function loadTouchedOf(

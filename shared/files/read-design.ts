@@ -55,7 +55,8 @@ function refuse({ path, reason }: Refusal): ReadDesign {
  */
 const RESERVED = new Set([...Object.getOwnPropertyNames(Object.prototype), 'prototype']);
 
-function findReservedKey(value: unknown, path: Path): Refusal | null {
+/** The first key of a value that no file may have, with the way to it. */
+export function findReservedKey(value: unknown, path: Path): Refusal | null {
   if (typeof value !== 'object' || value === null) return null;
   if (path.length > MOST_DEPTH) return { path: path.slice(0, 8), reason: 'is nested too deeply' };
   for (const key of Object.keys(value)) {
