@@ -129,6 +129,7 @@ function dropOf(
   const { circuits, flow } = mode;
   const fedFrom = circuits.netOf(load.edge.a);
   const supply = sources.get(circuits.islandOf(fedFrom));
+  if (!(load.nominalV > 0)) return undefined;
   if (!supply || fedFrom.side !== 'fed' || circuits.netOf(load.edge.b) === fedFrom) return undefined;
   const takenA = flow.currentOf(load.edge);
   const isOn = takenA > 1e-9;
