@@ -46,6 +46,8 @@ export interface Solution {
 
 /** Below this, Ω, a resistance is none: it drops less than a nanovolt at any current a boat knows. */
 const NO_OHM = 1e-15;
+/** Each takes what rounding is left down by as much as the first; few are ever needed. */
+const ROUNDS = 4;
 /** Voltages nearer than this share of the greater are the same. */
 const SAME = 1e-12;
 
@@ -117,35 +119,41 @@ export function solveCircuit(
   currentsA: ArrayLike<number>,
 ): Solution | null {
   const { stiff, loads, groups, aboveV, resistive, pattern } = circuit;
-  const carries = loads.map((load) => circuit.partOf(load.a) === circuit.partOf(load.b));
-  const edges = [
-    ...resistive.map((index) => edgeOf(stiff[index]!, 1 / stiff[index]!.ohm, -stiff[index]!.emfV / stiff[index]!.ohm)),
-    ...loads.map((load, i) => (carries[i] ? edgeOf(load, conductances[i]!, currentsA[i]!) : edgeOf(load, 0, 0))),
-  ];
-  function edgeOf({ a, b }: LoadBranch, conductance: number, currentA: number) {
-    const [from, to] = [groups[a]!, groups[b]!];
-    return { from, to, conductance, fixedA: currentA + conductance * (aboveV[a]! - aboveV[b]!) };
-  }
-  const factor = factorise(
-    pattern,
-    edges.map((edge) => edge.conductance),
-  );
+  const count = resistive.length + loads.length;
+  const from = new Int32Array(count);
+  const to = new Int32Array(count);
+  const leads = new Float64Array(count);
+  const flows = new Float64Array(count);
+  const put = (i: number, { a, b }: LoadBranch, conductance: number, currentA: number) => {
+    from[i] = groups[a]!;
+    to[i] = groups[b]!;
+    leads[i] = conductance;
+    flows[i] = currentA + conductance * (aboveV[a]! - aboveV[b]!);
+  };
+  resistive.forEach((index, i) => {
+    const branch = stiff[index]!;
+    put(i, branch, 1 / branch.ohm, -branch.emfV / branch.ohm);
+  });
+  loads.forEach((load, i) => {
+    const carries = circuit.partOf(load.a) === circuit.partOf(load.b);
+    put(resistive.length + i, load, carries ? conductances[i]! : 0, carries ? currentsA[i]! : 0);
+  });
+  const factor = factorise(pattern, leads);
   if (!factor) return null;
 
-  const flows = Float64Array.from(edges, (edge) => edge.fixedA);
   const groupV = new Float64Array(pattern.size);
-  for (let round = 0; round < 4; round++) {
+  for (let round = 0; round < ROUNDS; round++) {
     const lacking = new Float64Array(pattern.size);
     let largest = 0;
-    edges.forEach(({ from, to }, i) => {
-      lacking[from]! -= flows[i]!;
-      lacking[to]! += flows[i]!;
+    for (let i = 0; i < count; i++) {
+      lacking[from[i]!]! -= flows[i]!;
+      lacking[to[i]!]! += flows[i]!;
       largest = Math.max(largest, Math.abs(flows[i]!));
-    });
+    }
     if (round > 1 && lacking.every((amps) => Math.abs(amps) <= 4e-16 * largest)) break;
     const more = potentialsFor(factor, lacking);
-    edges.forEach(({ from, to, conductance }, i) => (flows[i]! += conductance * (more[from]! - more[to]!)));
-    more.forEach((volts, at) => (groupV[at]! += volts));
+    for (let i = 0; i < count; i++) flows[i]! += leads[i]! * (more[from[i]!]! - more[to[i]!]!);
+    for (let group = 0; group < more.length; group++) groupV[group]! += more[group]!;
   }
 
   const stiffA = new Float64Array(stiff.length);

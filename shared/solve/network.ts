@@ -17,6 +17,10 @@ export interface Network {
   readonly edges: readonly NetworkEdge[];
   /** The node of a terminal; undefined where there is no such terminal in the network. */
   nodeAt(device: EntityId, terminal: string): number | undefined;
+  /** The names of a device's terminals, of one that is removed too. */
+  terminalsOf(device: Device): readonly string[];
+  /** Whether a device is a piece of metal and nothing else: a busbar, a block, a bond. */
+  isJoin(device: EntityId): boolean;
   /** All edges that end on a node, once each. */
   edgesAt(node: number): readonly NetworkEdge[];
 }
@@ -75,9 +79,11 @@ export function networkOf(design: Design, modeId: EntityId): Network {
   const points = pointsOf(devices);
 
   const drafts: Draft[] = [];
+  const joins = new Set<EntityId>();
   for (const device of devices) {
     for (const element of kindOf(device)?.network(device, conditionOf(design, modeId, device.id)) ?? []) {
       if (element.type === 'join') {
+        joins.add(device.id);
         const joined = element.terminals.flatMap((terminal) => points.at(device.id, terminal) ?? []);
         for (const point of joined) points.metal.join(joined[0]!, point);
         continue;
@@ -101,7 +107,7 @@ export function networkOf(design: Design, modeId: EntityId): Network {
     if (a === undefined || b === undefined) continue;
     drafts.push({ type: 'run', run, ohm: runOhm(run, basis, design.zones ?? {}) ?? 0, a, b });
   }
-  return finish(points, drafts);
+  return finish(points, drafts, joins);
 }
 
 /** What a mode says of a device; see `Condition`. */
@@ -162,6 +168,7 @@ interface Points {
   readonly metal: Union;
   at(device: string, terminal: string): number | undefined;
   first(device: string): number | undefined;
+  terminalsOf(device: string): readonly string[] | undefined;
 }
 
 function pointsOf(devices: readonly Device[]): Points {
@@ -179,6 +186,10 @@ function pointsOf(devices: readonly Device[]): Points {
     metal: new Union(ends.length),
     at: (device, terminal) => byDevice.get(device)?.get(terminal),
     first: (device) => byDevice.get(device)?.values().next().value,
+    terminalsOf: (device) => {
+      const terminals = byDevice.get(device);
+      return terminals && [...terminals.keys()];
+    },
   };
 }
 
@@ -190,7 +201,7 @@ function mountOf(device: Device, points: Points): Draft | undefined {
   return { type: 'mount', device, terminal: points.ends[a]!.terminal, stud, a, b };
 }
 
-function finish(points: Points, drafts: readonly Draft[]): Network {
+function finish(points: Points, drafts: readonly Draft[], joins: ReadonlySet<EntityId>): Network {
   const nodeOfRoot = new Map<number, number>();
   const terminals: End[][] = [];
   const nodeOfPoint = points.ends.map((end, point) => {
@@ -215,6 +226,13 @@ function finish(points: Points, drafts: readonly Draft[]): Network {
       const point = points.at(device, terminal);
       return point === undefined ? undefined : nodeOfPoint[point];
     },
+    terminalsOf: (device) =>
+      points.terminalsOf(device.id) ??
+      kindOf(device)
+        ?.terminals(device)
+        .map(({ name }) => name) ??
+      [],
+    isJoin: (device) => joins.has(device),
     edgesAt: (node) => edgesByNode[node] ?? [],
   };
 }

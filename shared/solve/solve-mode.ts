@@ -200,7 +200,7 @@ function presentDevice(
   }
   const terminals: Record<string, { potentialV: number; currentA: number }> = {};
   let inflowA = 0;
-  for (const { name } of kindOf(device)?.terminals(device) ?? []) {
+  for (const name of network.terminalsOf(device)) {
     const node = network.nodeAt(device.id, name);
     const currentA = (isJoin ? arriving.get(`${device.id} ${name}`) : into.get(name)) ?? 0;
     if (currentA > 0) inflowA += currentA;
@@ -227,8 +227,7 @@ function stateOf(
 ): SolvedState {
   if (workOf(device) === 'remove') return 'removed';
   if (isJoin) {
-    const first = kindOf(device)?.terminals(device)[0]?.name ?? '';
-    const node = network.nodeAt(device.id, first);
+    const node = network.nodeAt(device.id, network.terminalsOf(device)[0] ?? '');
     return node !== undefined && flows.isLive(node) ? 'on' : 'dead';
   }
   const [edge] = edges;
