@@ -20,40 +20,73 @@ export const SIDE_DIRECTION: Readonly<Record<Side, Direction>> = { right: 0, bot
  * ties fall by the order in which states were reached.
  */
 export function findPath(grid: RouteGrid, from: PathEnd, to: PathEnd): number[] {
-  const { columns, rows } = grid;
   if (from.node === to.node) return [from.node];
+  const nearby = search(grid, from, to, windowOf(grid, from.node, to.node));
+  if (nearby.cost < CROWDED) return nearby.nodes;
+  const anywhere = search(grid, from, to, { left: 0, top: 0, right: grid.columns - 1, bottom: grid.rows - 1 });
+  return anywhere.cost < nearby.cost ? anywhere.nodes : nearby.nodes;
+}
+
+interface Window {
+  readonly left: number;
+  readonly top: number;
+  readonly right: number;
+  readonly bottom: number;
+}
+
+/** Squares round the straight box of two ends that are searched first; most runs need no more. */
+const REACH = 12;
+/** A path that costs as much goes through or over something: then the whole sheet is searched for a way round. */
+const CROWDED = 900;
+/** How much the search leans towards its goal; a little dearer paths for many fewer squares looked at. */
+const LEAN = 1.3;
+
+function windowOf({ columns, rows }: RouteGrid, from: number, to: number): Window {
+  const [fromColumn, toColumn] = [from % columns, to % columns];
+  const [fromRow, toRow] = [Math.floor(from / columns), Math.floor(to / columns)];
+  return {
+    left: Math.max(0, Math.min(fromColumn, toColumn) - REACH),
+    top: Math.max(0, Math.min(fromRow, toRow) - REACH),
+    right: Math.min(columns - 1, Math.max(fromColumn, toColumn) + REACH),
+    bottom: Math.min(rows - 1, Math.max(fromRow, toRow) + REACH),
+  };
+}
+
+function search(grid: RouteGrid, from: PathEnd, to: PathEnd, window: Window): { nodes: number[]; cost: number } {
+  const { columns, rows } = grid;
+  const { left, top, right, bottom } = window;
   const toColumn = to.node % columns;
   const toRow = Math.floor(to.node / columns);
-  const search = beginSearch(columns * rows * 4);
+  const frontier = beginSearch(columns * rows * 4);
   const strides = [1, columns, -1, -columns] as const;
 
   for (const heading of HEADINGS) {
     if (from.arrived !== undefined && heading === (from.arrived + 2) % 4) continue;
     const turned = from.arrived !== undefined && heading !== from.arrived ? COST.bend : 0;
-    open(search, from.node * 4 + heading, turned + exitCost(from, heading), -1, estimate(from.node, heading));
+    open(frontier, from.node * 4 + heading, turned + exitCost(from, heading), -1, estimate(from.node, heading));
   }
   for (;;) {
-    const state = takeCheapest(search);
-    if (state === -1) return [from.node, to.node];
-    if (search.closed[state] === search.stamp) continue;
-    search.closed[state] = search.stamp;
+    const state = takeCheapest(frontier);
+    if (state === -1) return { nodes: [from.node, to.node], cost: Infinity };
+    if (frontier.closed[state] === frontier.stamp) continue;
+    frontier.closed[state] = frontier.stamp;
     const node = state >> 2;
     const heading = (state & 3) as Direction;
-    if (node === to.node) return trace(search, state);
+    if (node === to.node) return { nodes: trace(frontier, state), cost: frontier.spent[state]! };
     const column = node % columns;
     const row = (node - column) / columns;
-    const spent = search.spent[state]!;
+    const spent = frontier.spent[state]!;
     for (const next of HEADINGS) {
       if (next === (heading + 2) % 4) continue;
       if (node === from.node && next !== heading) continue;
-      if ((next === 0 && column === columns - 1) || (next === 2 && column === 0)) continue;
-      if ((next === 1 && row === rows - 1) || (next === 3 && row === 0)) continue;
+      if ((next === 0 && column === right) || (next === 2 && column === left)) continue;
+      if ((next === 1 && row === bottom) || (next === 3 && row === top)) continue;
       const turning = next !== heading;
       const ahead = node + strides[next];
       let cost = 1 + stepCost(grid, node, ahead, next, ahead === to.node);
       if (turning) cost += COST.bend + (grid.level[node]! + grid.upright[node]! > 0 ? COST.touch : 0);
       if (ahead === to.node) cost += exitCost(to, ((next + 2) % 4) as Direction);
-      open(search, ahead * 4 + next, spent + cost, state, estimate(ahead, next));
+      open(frontier, ahead * 4 + next, spent + cost, state, estimate(ahead, next));
     }
   }
 
@@ -62,7 +95,7 @@ export function findPath(grid: RouteGrid, from: PathEnd, to: PathEnd): number[] 
     const dy = toRow - Math.floor(node / columns);
     const distance = Math.abs(dx) + Math.abs(dy);
     const bends = dx !== 0 && dy !== 0 ? 1 : distance > 0 && !headsFor(heading, dx, dy) ? 2 : 0;
-    return distance + bends * COST.bend;
+    return LEAN * (distance + bends * COST.bend);
   }
 }
 

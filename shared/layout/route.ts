@@ -16,9 +16,17 @@ export function routeRun(grid: RouteGrid, { run, from, to }: SheetRun): Point[] 
     nodes.push(...path.slice(1));
     leg = { node: stop.node, arrived: headingOf(grid, path) };
   }
-  const points = meetTerminals(corners(nodes.map((node) => pointOf(grid, node))), from.terminal, to.terminal);
+  const points = meetTerminals(
+    corners(nodes.map((node) => pointOf(grid, node))),
+    placeOnly(from.terminal),
+    placeOnly(to.terminal),
+  );
   addRun(grid, points);
   return points;
+}
+
+function placeOnly({ x, y }: Point): Point {
+  return { x, y };
 }
 
 export function pathEnd(grid: RouteGrid, { terminal }: RunEnd): PathEnd {

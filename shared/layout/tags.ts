@@ -117,7 +117,7 @@ function barCandidates(device: Device, box: Box, lines: readonly string[]): TagL
     ];
   }
   const places: TagLayout[] = [];
-  for (const y of [box.y - 2 - (rows - 1) * TAG.line, box.y + box.height + TAG.ascent + 1]) {
+  for (const y of [box.y - 3 - (rows - 1) * TAG.line, box.y + box.height + TAG.ascent]) {
     for (let x = box.x; x <= Math.max(box.x, box.x + box.width - width); x += 8) {
       places.push(tagAt(device, lines, x, y, 'start', true));
     }
