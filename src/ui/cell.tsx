@@ -29,7 +29,7 @@ export function Cell({
   return (
     <div className={join('cell', on && 'on', alone && 'alone', waiting && 'wait', className)}>
       <small>{caption}</small>
-      <b className={mono ? 'mono' : undefined}>{waiting ? ' ' : children}</b>
+      <b className={mono ? 'mono' : undefined}>{waiting ? '\u00a0' : children}</b>
     </div>
   );
 }

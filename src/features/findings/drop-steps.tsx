@@ -3,7 +3,6 @@ import { basisOf, conductorOf } from '#shared/model/defaults.ts';
 import type { Design } from '#shared/model/design.ts';
 import { formatPercent } from '#shared/units/fraction.ts';
 import { formatLength } from '#shared/units/length.ts';
-import { formatNumber } from '#shared/units/number.ts';
 import { formatV } from '#shared/units/voltage.ts';
 import { useUnits } from '#src/lib/reader-settings.ts';
 import { roundStep } from '#src/ui/scale.tsx';
@@ -11,7 +10,7 @@ import { roundStep } from '#src/ui/scale.tsx';
 type Drop = NonNullable<RunAnalysis['drop']>;
 
 const ROW = 14;
-const LEFT = 148;
+const LEFT = 166;
 const RIGHT = 400;
 const WIDTH = 464;
 
@@ -80,7 +79,7 @@ export function DropSteps({
               />
               {i < steps.length - 1 && <path className="tick" d={`M${at(after)} ${y + 12}v5`} />}
               <text className="figure" x={WIDTH} y={y + 11} textAnchor="end">
-                {formatNumber(volts, 3)} V
+                {volts.toFixed(3)} V
               </text>
             </g>
           );

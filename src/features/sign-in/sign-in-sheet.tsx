@@ -32,7 +32,7 @@ export function SignInSheet({
           <Field caption="Title">{title}</Field>
           <Field caption="Kept at">this server, nowhere else</Field>
           <Field caption="Date">{today()}</Field>
-          <Field caption="Caution">a design aid, not a certificate</Field>
+          <Field caption="Caution">a design aid</Field>
           <Field caption="Sheet">1 of 1</Field>
         </dl>
       </div>

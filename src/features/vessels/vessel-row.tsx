@@ -31,7 +31,8 @@ export function VesselRow({
     ? `/vessels/${vessel.vesselId}/draw`
     : `/vessels/${vessel.vesselId}/revisions`;
   const length = vessel.lengthM === null ? 'length not said' : formatLength(vessel.lengthM, units);
-  const about = [vessel.lengthM === null ? null : length, vessel.type].filter(Boolean).join(' ');
+  const type = vessel.type === null ? null : vessel.type.charAt(0).toLowerCase() + vessel.type.slice(1);
+  const about = [vessel.lengthM === null ? null : length, type].filter(Boolean).join(' ');
 
   return (
     <li className="vessel">
