@@ -11,6 +11,7 @@ import { answerNothingHere, answerProblem } from './http/problems.ts';
 import { signInRoutes } from './http/sign-in-addresses.ts';
 import { designRoutes } from './routes/design/design.ts';
 import { newsRoutes } from './routes/design/news.ts';
+import { partsRoutes } from './routes/design/parts.ts';
 import { revisionRoutes } from './routes/design/revisions.ts';
 import { mailboxRoutes } from './routes/mailbox/mailbox.ts';
 import { meRoutes } from './routes/me/me.ts';
@@ -59,6 +60,7 @@ export function createApp(house: House, client: RequestHandler = serveBuiltClien
     vesselRoutes,
     designRoutes,
     newsRoutes,
+    partsRoutes,
     revisionRoutes,
     peopleRoutes,
     invitationRoutes,

@@ -26,17 +26,13 @@ signInRoutes.all('/api/auth/{*any}', express.json({ limit: '16kb', type: () => t
   const answer = await houseOf(request).signIn.handle(toWebRequest(request));
   for (const cookie of answer.headers.getSetCookie()) response.append('Set-Cookie', cookie);
   response.set('Cache-Control', 'no-store');
-  const text = await answer.text();
   if (answer.status >= 400) {
-    sendProblem(response, problemFrom(answer.status, text));
+    sendProblem(response, problemFrom(answer.status, await answer.text()));
     return;
   }
-  const location = answer.headers.get('location');
-  if (location !== null) response.set('Location', location);
-  response
-    .status(answer.status)
-    .type('application/json')
-    .send(text === '' ? '{}' : text);
+  // What the package tells of the session and the account stays here: the cookie and `/api/me` are enough, and
+  // signing up answers the same whether there was such an account or not.
+  response.json({ done: true });
 });
 
 /** Read, limited and checked for its origin already: what goes on carries our own address and nothing else's. */
