@@ -1,4 +1,4 @@
-import { memo, useMemo } from 'react';
+import { memo, useMemo, type CSSProperties } from 'react';
 
 import { layoutSheet } from '#shared/layout/layout-sheet.ts';
 import { paperSize } from '#shared/layout/paper.ts';
@@ -28,7 +28,13 @@ export const SheetPicture = memo(function SheetPicture({
   const sheet = sheetOf(design.sheets[sheetId] ?? { id: sheetId });
   const { width, height } = paperSize(sheet);
   return (
-    <svg className={className} viewBox={`0 0 ${width} ${height}`} role="img" aria-label={nameOfSheet(sheet)}>
+    <svg
+      className={className}
+      style={{ '--ratio': width / height } as CSSProperties}
+      viewBox={`0 0 ${width} ${height}`}
+      role="img"
+      aria-label={nameOfSheet(sheet)}
+    >
       <SheetDrawing
         design={design}
         sheetId={sheetId}

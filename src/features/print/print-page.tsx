@@ -1,6 +1,7 @@
 import { useState } from 'react';
 import { Link } from 'react-router';
 
+import type { Revision } from '#shared/api/design.ts';
 import type { VesselSummary } from '#shared/api/vessels.ts';
 import { basisOf } from '#shared/model/defaults.ts';
 import { useOpenDesign } from '#src/design/open-design.ts';
@@ -19,7 +20,10 @@ import { fileNameOf, usePrinting } from './use-printing.ts';
 export function PrintPage({ vessel, myName }: { readonly vessel: VesselSummary; readonly myName: string }) {
   const design = useOpenDesign((open) => open.design);
   const analysis = useOpenDesign((open) => open.analysis);
+  const seq = useOpenDesign((open) => open.seq);
   const basis = basisOf(design);
+  // As long as nothing was changed since, what is printed is that revision.
+  const issued = latest?.seq === seq ? latest : undefined;
   const [off, setOff] = useState<ReadonlySet<string>>(new Set());
   const [ink, setInk] = useState<'colour' | 'black'>('colour');
   const [listPaper, setListPaper] = useState<'letter' | 'a4'>(basis.units === 'us' ? 'letter' : 'a4');
@@ -30,12 +34,13 @@ export function PrintPage({ vessel, myName }: { readonly vessel: VesselSummary; 
   const chosenSheets = sheets.filter((sheet) => !off.has(sheet.id));
   const chosenLists = lists.filter((list) => !off.has(list.id));
   const count = chosenSheets.length + chosenLists.length;
-  const file = fileNameOf(design, vessel.revision?.letter ?? null);
+  const file = fileNameOf(design, issued?.letter ?? (latest === undefined ? null : `after-${latest.letter}`));
   const papers = [...new Set(chosenSheets.map((sheet) => sheet.paper ?? 'A4'))].join(', ');
   const facts = {
     legalOwner: vessel.shopName,
     created: myName,
-    revision: vessel.revision === null ? undefined : `${vessel.revision.letter} +`,
+    revision: issued?.letter ?? (latest === undefined ? undefined : `${latest.letter} +`),
+    issued: issued?.issuedAt.slice(0, 10),
   };
 
   function tick(id: string, isOn: boolean) {
@@ -118,7 +123,9 @@ export function PrintPage({ vessel, myName }: { readonly vessel: VesselSummary; 
           <Cell caption="Drawing number" mono>
             {design.vessel?.drawingNumber ?? 'none'}
           </Cell>
-          <Cell caption="Revision">{vessel.revision === null ? 'none issued' : `after ${vessel.revision.letter}`}</Cell>
+          <Cell caption="Revision">
+            {latest === undefined ? 'none issued' : issued === undefined ? `after ${latest.letter}` : latest.letter}
+          </Cell>
           <Cell caption="Lines and words">vector</Cell>
           <Cell caption="Ink">{ink === 'colour' ? 'colour' : 'black only'}</Cell>
           <Cell caption="File" mono className="wide">

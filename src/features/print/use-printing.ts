@@ -47,12 +47,8 @@ export function usePrinting() {
 }
 
 /** `minnow-TQE-0003-A.pdf`: what a shop finds again among its files. */
-export function fileNameOf(design: Design, letter: string | null): string {
-  const parts = [
-    design.vessel?.name ?? 'drawing',
-    design.vessel?.drawingNumber,
-    letter === null ? undefined : `after-${letter}`,
-  ];
+export function fileNameOf(design: Design, revision: string | null): string {
+  const parts = [design.vessel?.name ?? 'drawing', design.vessel?.drawingNumber, revision ?? undefined];
   const name = parts
     .filter((part) => part !== undefined && part !== '')
     .map((part) => part!.trim().replace(/[^\p{L}\p{N}._-]+/gu, '-'))
