@@ -194,7 +194,7 @@ function* overLevel(segment: Segment, measures: Measures, cost: number, side: 'a
 /** Off the run's middle, up and to the right first, then all round and further out. */
 function onLeader(segment: Segment, measures: Measures): Candidate[] {
   const at = { x: (segment.from.x + segment.to.x) / 2, y: (segment.from.y + segment.to.y) / 2 };
-  return [16, 24, 32, 44, 56, 72].flatMap((out, ring) =>
+  return [16, 24, 32, 44, 56, 72, 88, 112].flatMap((out, ring) =>
     AROUND.map(([dx, dy], i) => {
       const x = at.x + dx * out;
       const y = at.y + dy * out;

@@ -31,7 +31,7 @@ export function layoutSheet(design: Design, sheetId: EntityId, previous?: SheetL
   const waysOut = spaceOf(design, sheet, devices);
   takeWaysOut(waysOut, runs);
   const unbarred = devices.filter((device) => device.kind !== 'busbar');
-  for (const tag of placeTags(waysOut, unbarred).values()) addCost(grid, tag.box, COST.text);
+  for (const tag of placeTags(waysOut, unbarred).values()) addCost(grid, tag.box, COST.tag);
   const routes = routeAll(design, grid, runs);
   const hops = findHops(runs.map(({ run }) => routes.get(run.id)!.points));
 

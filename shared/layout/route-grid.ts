@@ -30,7 +30,10 @@ export const COST = {
   inside: 1000,
   edge: 25,
   near: 0.75,
+  /** Notes and names of zones, which stay where they are. */
   text: 12,
+  /** Tags, which are placed again once the runs lie. */
+  tag: 3,
   /** Leaving a terminal by another side than its own. */
   sideways: 8,
   backwards: 60,
