@@ -67,9 +67,13 @@ test('an unbalanced bridge carries what nodal analysis says (Principles of Analo
     circuit(
       [battery('g1', 15, 0), bus('a'), bus('b'), bus('c'), bus('d')],
       [
-        ...[wire('w1', 'g1.pos', 'a.1', 0), wire('w2', 'g1.neg', 'b.1', 0)],
-        ...[arm('ac', 50, 'a.2', 'c.1'), arm('cb', 10, 'c.2', 'b.2'), arm('ad', 30, 'a.3', 'd.1')],
-        ...[arm('db', 20, 'd.2', 'b.3'), arm('dc', 40, 'd.3', 'c.3')],
+        wire('w1', 'g1.pos', 'a.1', 0),
+        wire('w2', 'g1.neg', 'b.1', 0),
+        arm('ac', 50, 'a.2', 'c.1'),
+        arm('cb', 10, 'c.2', 'b.2'),
+        arm('ad', 30, 'a.3', 'd.1'),
+        arm('db', 20, 'd.2', 'b.3'),
+        arm('dc', 40, 'd.3', 'c.3'),
       ],
     ),
     'all-on',
@@ -97,7 +101,8 @@ test.each([
     circuit(
       [battery('g1', 1, 0), bus('x0'), bus('n'), ...ids.map((i) => bus(`x${i + 1}`))],
       [
-        ...[wire('w1', 'g1.pos', 'x0.1', 0), wire('w2', 'g1.neg', 'n.1', 0)],
+        wire('w1', 'g1.pos', 'x0.1', 0),
+        wire('w2', 'g1.neg', 'n.1', 0),
         ...ids.map((i) => wire(`s${i}`, `x${i}.2`, `x${i + 1}.1`, 1000)),
         ...ids.map((i) => wire(`p${i}`, `x${i + 1}.3`, 'n.2', 1000)),
       ],
