@@ -194,8 +194,10 @@ function* overLevel(segment: Segment, measures: Measures, cost: number, side: 'a
 /** Off the run's middle, up and to the right first, then all round and further out. */
 function onLeader(segment: Segment, measures: Measures): Candidate[] {
   const at = { x: (segment.from.x + segment.to.x) / 2, y: (segment.from.y + segment.to.y) / 2 };
-  return [16, 24, 32, 44, 56, 72, 88, 112].flatMap((out, ring) =>
-    AROUND.map(([dx, dy], i) => {
+  // never along the run itself
+  const isUpright = segment.from.x === segment.to.x;
+  return [16, 24, 32, 44, 56, 72, 88].flatMap((out, ring) =>
+    AROUND.filter(([dx, dy]) => (isUpright ? dx !== 0 : dy !== 0)).map(([dx, dy], i) => {
       const x = at.x + dx * out;
       const y = at.y + dy * out;
       const left = dx === 0 ? x - measures.width / 2 : x;
