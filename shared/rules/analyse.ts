@@ -7,7 +7,6 @@ import type {
   RunAnalysis,
 } from '#shared/model/analysis.ts';
 import type { Design, EntityId } from '#shared/model/design.ts';
-import { partsList } from '#shared/lists/parts-list.ts';
 import { ownModes, proveDesign, type Proof, type ProvedRun } from '#shared/solve/proof.ts';
 
 import { readable } from './readable.ts';
@@ -15,11 +14,16 @@ import { compareNaturally, compareText } from './marks.ts';
 import { applyRule } from './rule.ts';
 import { RULES } from './index.ts';
 
+/** Whoever lists the parts; the lists stand above the engine, so they are handed in. */
+export interface Catalogue {
+  partsOf?(design: Design): readonly PartsLine[];
+}
+
 /**
  * The whole answer for a design: the modes solved, every run proved, what protective devices must break, energy,
  * parts and findings. It never throws and never answers NaN, whatever it is given.
  */
-export function analyse(given: Design): Analysis {
+export function analyse(given: Design, catalogue: Catalogue = {}): Analysis {
   const design = readable(given);
   const proof = proveDesign(design);
   return {
@@ -27,7 +31,7 @@ export function analyse(given: Design): Analysis {
     runs: Object.fromEntries(proof.runs.map((run) => [run.id, analysisOfRun(run)])),
     faults: proof.faults,
     energy: energyOf(proof),
-    parts: partsList(design),
+    parts: catalogue.partsOf?.(design) ?? [],
     findings: findingsOf(proof),
   };
 }

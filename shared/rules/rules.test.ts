@@ -1,20 +1,22 @@
-import { readdirSync, readFileSync } from 'node:fs';
+/// <reference types="vite/client" />
 import { describe, expect, it } from 'vitest';
 
 import { RULES } from './index.ts';
 
-const ROOM = import.meta.dirname;
+const FILES: Readonly<Record<string, string>> = import.meta.glob('./*/*.ts', {
+  query: '?raw',
+  import: 'default',
+  eager: true,
+});
 const GROUPS = ['conductor', 'protection', 'voltage', 'topology', 'record'];
-const read = (file: string) => readFileSync(`${ROOM}/${file}`, 'utf8');
+const read = (file: string) => FILES[`./${file}`] ?? '';
 
 /** A rule is its file, its table of cases and its line in the list; its doc comment is its page. */
 describe('the rules', () => {
   it('are all in the list, and each file of a group is one', () => {
-    const files = GROUPS.flatMap((group) =>
-      readdirSync(`${ROOM}/${group}`)
-        .filter((file) => file.endsWith('.ts') && !file.endsWith('.test.ts'))
-        .map((file) => `${group}/${file.replace('.ts', '')}`),
-    );
+    const files = Object.keys(FILES)
+      .filter((file) => !file.endsWith('.test.ts'))
+      .map((file) => file.replace('./', '').replace('.ts', ''));
     expect(RULES.map(({ id }) => id).toSorted()).toEqual(files.toSorted());
   });
 

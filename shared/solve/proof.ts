@@ -95,7 +95,7 @@ export function proveDesign(design: Design): Proof {
   const currents = reckoned.runs;
   considerSources(circuits, charging, supplies.ofSource, currents);
 
-  const judged = own.length > 0 ? [...own.map(({ mode }) => mode)] : [];
+  const judged = own.map(({ mode }) => mode);
   const dropModes = (ids: readonly EntityId[]): DropMode[] =>
     ids.map((mode) => ({
       mode,

@@ -4,11 +4,17 @@ import type { Device } from '#shared/model/design.ts';
 
 export type Ratings = Readonly<Record<string, unknown>>;
 
+/** Reading ratings by their schema is slow beside all else and asked often; a document's objects never change. */
+const known = new WeakMap<object, { readonly kind: string; readonly ratings: Ratings }>();
+
 /** The ratings of a device with what its kind's file fills in; what makes no sense is left out. */
 export function ratingsOf(device: Device): Ratings {
+  const before = known.get(device.ratings);
+  if (before && before.kind === device.kind) return before.ratings;
   const kind = kindOf(device);
-  if (!kind) return {};
-  return { ...kind.defaults?.(device), ...readRatings(kind.ratings, device) };
+  const ratings = kind ? { ...kind.defaults?.(device), ...readRatings(kind.ratings, device) } : {};
+  known.set(device.ratings, { kind: device.kind, ratings });
+  return ratings;
 }
 
 export function amountOf(ratings: Ratings, name: string): number | undefined {
