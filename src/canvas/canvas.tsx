@@ -121,6 +121,9 @@ function Surface({ size }: { readonly size: { width: number; height: number } })
         multiSelectionKeyCode={null}
         deleteKeyCode={null}
         zoomActivationKeyCode={null}
+        onMove={(_event, view) => {
+          if (canvas.getState().unitsPerPixel !== 1 / view.zoom) canvas.setState({ unitsPerPixel: 1 / view.zoom });
+        }}
         proOptions={PRO_OPTIONS}
       >
         <FarOrNear />
@@ -183,6 +186,7 @@ function useFlights(design: Design, layout: SheetLayout, size: { width: number; 
   }, [design, layout, size]);
 
   useEffect(() => {
+    canvas.setState({ unitsPerPixel: 1 / flow.getZoom() });
     const now = latest.current;
     const paper = boxOfPaper(now.design, sheetId);
     if (flight.to === 'fit') {
@@ -191,6 +195,7 @@ function useFlights(design: Design, layout: SheetLayout, size: { width: number; 
     }
     const box = boxOfSelection(now.design, now.layout, canvas.getState().selection, sheetId);
     if (box === null) return;
+    if (flow.getZoom() >= FAR_ZOOM && isInView(box, flow.getViewport(), now.size)) return;
     const zoom = Math.max(flow.getZoom(), 0.9);
     void flow.setCenter(box.x + box.width / 2, box.y + box.height / 2, { zoom, duration: steadyMs() });
   }, [flow, canvas, flight, sheetId]);
@@ -207,6 +212,17 @@ function useFlights(design: Design, layout: SheetLayout, size: { width: number; 
       void flow.setViewport(viewOf(boxOfPaper(latest.current.design, sheetId), size));
     }
   }, [flow, size, sheetId]);
+}
+
+/** Wholly, and with a little room round it. */
+function isInView(box: Box, { x, y, zoom }: View, size: { width: number; height: number }): boolean {
+  const margin = 12;
+  return (
+    box.x * zoom + x >= margin &&
+    box.y * zoom + y >= margin &&
+    (box.x + box.width) * zoom + x <= size.width - margin &&
+    (box.y + box.height) * zoom + y <= size.height - margin
+  );
 }
 
 function steadyMs(): number {

@@ -9,6 +9,7 @@ import { useCanvasStore } from '#src/canvas/canvas-store.ts';
 import { selectRun } from '#src/canvas/selection.ts';
 import { useOpenDesign } from '#src/design/open-design.ts';
 import { Cell, EditCell, PickCell } from '#src/ui/cell.tsx';
+import { Check } from '#src/ui/check.tsx';
 
 import { FindingCard } from './finding-card.tsx';
 import { RatingsForm } from './ratings-form.tsx';
@@ -112,14 +113,13 @@ function DeviceFields({ device }: { readonly device: Device }) {
         read={(text) => ({ ok: true, value: text.trim() })}
         onKeep={set('note')}
       />
-      <label className="cell tick span-6">
-        <input
-          type="checkbox"
-          checked={device.locked === true}
-          onChange={(event) => void setField(path('locked'), event.currentTarget.checked || undefined)}
-        />
+      <Check
+        className="cell tick span-6"
+        checked={device.locked === true}
+        onChange={(isLocked) => void setField(path('locked'), isLocked || undefined)}
+      >
         Locked: sizing leaves it as it is
-      </label>
+      </Check>
     </div>
   );
 }

@@ -5,7 +5,7 @@ import type { Analysis, Finding } from '#shared/model/analysis.ts';
 import { basisOf } from '#shared/model/defaults.ts';
 import type { Design, PlainColour, Run } from '#shared/model/design.ts';
 import { formatA } from '#shared/units/current.ts';
-import { formatPercent } from '#shared/units/fraction.ts';
+import { formatPercent, formatPercentBeside } from '#shared/units/fraction.ts';
 import { formatLength, type UnitSystem } from '#shared/units/length.ts';
 import { formatV } from '#shared/units/voltage.ts';
 import type { Reading } from '#src/ui/cell.tsx';
@@ -63,7 +63,7 @@ export const COLUMNS: readonly Column[] = [
   {
     key: 'mark',
     title: 'Run',
-    width: 60,
+    width: 56,
     mono: true,
     show: ({ run }) => run.mark ?? '',
     edit: field('mark', ({ run }) => run.mark ?? '', anyText),
@@ -71,7 +71,7 @@ export const COLUMNS: readonly Column[] = [
   {
     key: 'from',
     title: 'From',
-    width: 92,
+    width: 104,
     mono: true,
     show: ({ run }, { design }) => sayEnd(design, run.from),
     edit: field(
@@ -83,7 +83,7 @@ export const COLUMNS: readonly Column[] = [
   {
     key: 'to',
     title: 'To',
-    width: 88,
+    width: 104,
     mono: true,
     show: ({ run }, { design }) => sayEnd(design, run.to),
     edit: field(
@@ -95,7 +95,7 @@ export const COLUMNS: readonly Column[] = [
   {
     key: 'length',
     title: 'Length',
-    width: 84,
+    width: 96,
     right: true,
     show: ({ run }, { units }) =>
       run.lengthM === undefined ? <span className="quiet">not known</span> : formatLength(run.lengthM, units),
@@ -108,7 +108,7 @@ export const COLUMNS: readonly Column[] = [
   {
     key: 'size',
     title: 'Size',
-    width: 68,
+    width: 52,
     mono: true,
     show: ({ run }) => run.conductor.size.replace(' AWG', ''),
     edit: field(
@@ -120,7 +120,7 @@ export const COLUMNS: readonly Column[] = [
   {
     key: 'colour',
     title: 'Colour',
-    width: 96,
+    width: 88,
     show: ({ run }, { design }) => {
       const colour = sayColour(design, run);
       return (
@@ -138,7 +138,7 @@ export const COLUMNS: readonly Column[] = [
   {
     key: 'zones',
     title: 'Zones',
-    width: 110,
+    width: 96,
     wideOnly: true,
     show: ({ run }, { design }) => sayZones(design, run),
     edit: field(
@@ -150,14 +150,14 @@ export const COLUMNS: readonly Column[] = [
   {
     key: 'carries',
     title: 'Carries',
-    width: 68,
+    width: 64,
     right: true,
     show: ({ run }, { analysis }) => amps(analysis?.runs[run.id]?.designCurrentA),
   },
   {
     key: 'good-for',
     title: 'Good for',
-    width: 76,
+    width: 68,
     right: true,
     show: ({ run }, { analysis }) => amps(analysis?.runs[run.id]?.ampacity.allowedA),
   },
@@ -171,7 +171,7 @@ export const COLUMNS: readonly Column[] = [
   {
     key: 'drop',
     title: 'Drop',
-    width: 72,
+    width: 64,
     right: true,
     show: ({ run }, { analysis }) => {
       const volts = Math.abs(analysis?.runs[run.id]?.drop?.volts ?? Number.NaN);
@@ -181,18 +181,18 @@ export const COLUMNS: readonly Column[] = [
   {
     key: 'path',
     title: 'Path',
-    width: 60,
+    width: 56,
     right: true,
     wideOnly: true,
     show: ({ run }, { analysis }) => {
-      const fraction = analysis?.runs[run.id]?.drop?.fraction;
-      return fraction === undefined ? '' : formatPercent(fraction);
+      const drop = analysis?.runs[run.id]?.drop;
+      return drop === null || drop === undefined ? '' : formatPercentBeside(drop.fraction, drop.limit);
     },
   },
   {
     key: 'protection',
     title: 'Protection',
-    width: 110,
+    width: 96,
     wideOnly: true,
     show: ({ run }, { design, analysis }) => sayProtection(design, analysis, run),
   },

@@ -7,6 +7,7 @@ import { useCanvas, useCanvasStore } from '#src/canvas/canvas-store.ts';
 import { selectRun } from '#src/canvas/selection.ts';
 import { useOpenDesign } from '#src/design/open-design.ts';
 import { useUnits } from '#src/lib/reader-settings.ts';
+import { Check } from '#src/ui/check.tsx';
 
 import { TypedCell } from './ledger-cell.tsx';
 import { COLUMNS, type Column, type LedgerFacts, type LedgerRow } from './ledger-columns.tsx';
@@ -113,14 +114,9 @@ export function Ledger({ rowHeight, isNarrow }: { readonly rowHeight: number; re
             onChange={(event) => setSought(event.currentTarget.value)}
           />
         </label>
-        <label className="ledger-choice quiet">
-          <input
-            type="checkbox"
-            checked={isSheetOnly}
-            onChange={(event) => setIsSheetOnly(event.currentTarget.checked)}
-          />
+        <Check className="ledger-choice quiet" checked={isSheetOnly} onChange={setIsSheetOnly}>
           This sheet only
-        </label>
+        </Check>
       </div>
       <div className="ledger-scroll" ref={scroller}>
         {/* A grid whose cells take the keyboard. */}

@@ -5,13 +5,14 @@ import { basisOf, conductorOf, workOf } from '#shared/model/defaults.ts';
 import { COLOURS, type PlainColour, type Run } from '#shared/model/design.ts';
 import { INSULATION_TEMPERATURES, sizeOf } from '#shared/model/size.ts';
 import { formatA } from '#shared/units/current.ts';
-import { formatPercent } from '#shared/units/fraction.ts';
+import { formatPercent, formatPercentBeside } from '#shared/units/fraction.ts';
 import { formatLength } from '#shared/units/length.ts';
 import { formatC } from '#shared/units/temperature.ts';
 import { formatV } from '#shared/units/voltage.ts';
 import { useOpenDesign } from '#src/design/open-design.ts';
 import { useUnits } from '#src/lib/reader-settings.ts';
 import { Cell, EditCell, PickCell } from '#src/ui/cell.tsx';
+import { Check } from '#src/ui/check.tsx';
 import { Scale } from '#src/ui/scale.tsx';
 
 import { FindingCard } from './finding-card.tsx';
@@ -147,14 +148,13 @@ function RunFields({ run }: { readonly run: Run }) {
         read={(text) => ({ ok: true, value: text.trim() })}
         onKeep={set('note')}
       />
-      <label className="cell tick span-6">
-        <input
-          type="checkbox"
-          checked={run.locked === true}
-          onChange={(event) => void setField(path('locked'), event.currentTarget.checked || undefined)}
-        />
+      <Check
+        className="cell tick span-6"
+        checked={run.locked === true}
+        onChange={(isLocked) => void setField(path('locked'), isLocked || undefined)}
+      >
         Locked: sizing leaves it as it is
-      </label>
+      </Check>
     </div>
   );
 }
@@ -216,7 +216,7 @@ function Judgement({ run }: { readonly run: Run }) {
               <h3>
                 Voltage drop to {design.devices[found.drop.worstLoad]?.mark ?? 'its load'}
                 <span className="num">
-                  <b>{formatV(found.drop.volts)}</b>, {formatPercent(found.drop.fraction)}
+                  <b>{formatV(found.drop.volts)}</b>, {formatPercentBeside(found.drop.fraction, found.drop.limit)}
                 </span>
               </h3>
               <Scale

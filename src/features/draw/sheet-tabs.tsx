@@ -49,7 +49,7 @@ export function SheetTabs() {
           ),
         )}
         {mayEdit && (
-          <button type="button" onClick={add}>
+          <button type="button" className="add-sheet" onClick={add}>
             Add a sheet
           </button>
         )}

@@ -4,6 +4,7 @@ import { basisOf, zoneAmbientC } from '#shared/model/defaults.ts';
 import type { Run } from '#shared/model/design.ts';
 import { formatC } from '#shared/units/temperature.ts';
 import { useOpenDesign } from '#src/design/open-design.ts';
+import { Check } from '#src/ui/check.tsx';
 
 import { sayZonesWithHeat } from './run-words.ts';
 import { useSetField } from './use-edit.ts';
@@ -35,14 +36,14 @@ export function ZonesCell({ run, className }: { readonly run: Run; readonly clas
         <Popover.Content className="menu zones-menu" align="start" sideOffset={2}>
           {zones.length === 0 && <p className="quiet">No zones yet: add them on the Basis page.</p>}
           {zones.map((zone) => (
-            <label key={zone.id} className="menu-line">
-              <input
-                type="checkbox"
-                checked={passed.includes(zone.id)}
-                onChange={(event) => toggle(zone.id, event.currentTarget.checked)}
-              />
+            <Check
+              key={zone.id}
+              className="menu-line"
+              checked={passed.includes(zone.id)}
+              onChange={(isPassed) => toggle(zone.id, isPassed)}
+            >
               {zone.name}, {formatC(zoneAmbientC(zone, basisOf(design)))}
-            </label>
+            </Check>
           ))}
         </Popover.Content>
       </Popover.Portal>
