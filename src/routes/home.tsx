@@ -32,6 +32,7 @@ export function HomeRoute() {
       <Hatch />
       <ShopHead
         me={me}
+        onOpenFile={shop === undefined ? undefined : chooseFile}
         says={
           active.data === undefined
             ? undefined
@@ -42,7 +43,7 @@ export function HomeRoute() {
         action={
           shop !== undefined && (
             <>
-              <Button onClick={chooseFile} off={file.isOpening}>
+              <Button className="desk-only" onClick={chooseFile} off={file.isOpening}>
                 {file.isOpening ? 'Opening' : 'Open a file'}
               </Button>
               {!isFirst && (

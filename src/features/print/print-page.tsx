@@ -17,7 +17,16 @@ import { SetPreview } from './set-preview.tsx';
 import { fileNameOf, usePrinting } from './use-printing.ts';
 
 /** The drawing set put together: which sheets and lists, on what paper, in what ink, and made into one PDF. */
-export function PrintPage({ vessel, myName }: { readonly vessel: VesselSummary; readonly myName: string }) {
+export function PrintPage({
+  vessel,
+  myName,
+  latest,
+}: {
+  readonly vessel: VesselSummary;
+  readonly myName: string;
+  /** The latest issued revision. */
+  readonly latest: Revision | undefined;
+}) {
   const design = useOpenDesign((open) => open.design);
   const analysis = useOpenDesign((open) => open.analysis);
   const seq = useOpenDesign((open) => open.seq);

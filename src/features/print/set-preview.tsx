@@ -2,8 +2,9 @@ import type { Analysis } from '#shared/model/analysis.ts';
 import { sheetOf } from '#shared/model/defaults.ts';
 import type { Design, Sheet } from '#shared/model/design.ts';
 import { nameOfSheet, SheetPicture } from '#src/design/sheet-picture.tsx';
+import { useShownTheme } from '#src/lib/reader-settings.ts';
 import { EmptyState } from '#src/ui/empty-state.tsx';
-import { monoInk, paperInk, type Ink } from '#symbols/ink.ts';
+import { monoInk, paperInk, screenInk, type Ink } from '#symbols/ink.ts';
 import type { IssueFacts } from '#symbols/sheet/title-fields.ts';
 
 import type { PrintedList } from './printed-lists.ts';
@@ -29,7 +30,11 @@ export function SetPreview({
   readonly facts: IssueFacts;
   readonly ink: 'colour' | 'black';
 }) {
-  const paper: Ink = { ...(ink === 'black' ? monoInk : paperInk), ...SCREEN_FACES };
+  // Nothing white in the dark: night shows the sheet as the canvas does, in red.
+  const isNight = useShownTheme() === 'night';
+  const paper: Ink = isNight
+    ? { ...screenInk, colourCodes: true }
+    : { ...(ink === 'black' ? monoInk : paperInk), ...SCREEN_FACES };
   const inReview = analysis === null || analysis.findings.some((f) => f.severity === 'must' && f.accepted !== true);
   if (sheets.length + lists.length === 0)
     return <EmptyState title="Nothing is ticked">Tick the sheets and lists that belong to the set.</EmptyState>;

@@ -16,11 +16,13 @@ export function ShopHead({
   me,
   says,
   action,
+  onOpenFile,
 }: {
   readonly me: Me;
   /** The vessels in a few words. */
   readonly says?: string;
   readonly action?: ReactNode;
+  readonly onOpenFile?: () => void;
 }) {
   const client = useQueryClient();
   const navigate = useNavigate();
@@ -52,6 +54,12 @@ export function ShopHead({
           <Initials people={[{ name: me.name, here: true }]} />
         </span>
         <Menu trigger={<Button>Menu</Button>}>
+          {onOpenFile !== undefined && (
+            <>
+              <MenuLine onChoose={onOpenFile}>Open a file as a new vessel</MenuLine>
+              <MenuRule />
+            </>
+          )}
           <ReaderChoices />
           <MenuRule />
           <MenuLine onChoose={() => void signOut(client).then(() => navigate('/sign-in'))}>Sign out {me.name}</MenuLine>
