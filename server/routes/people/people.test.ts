@@ -82,7 +82,7 @@ it('somebody with an account joins signed in, and only with the address that was
   const params = { token: await tokenFor(invited.email) };
   expect((await (await aPerson(house)).ask(acceptInvitation, { params })).status).toBe(403);
   expect((await invited.ask(acceptInvitation, { params })).body).toEqual({ vesselId: vessel.vesselId });
-  expect((await invited.ask(getVessel, { params: vessel })).body.role).toBe('installer');
+  expect((await invited.ask(getVessel, { params: { vesselId: vessel.vesselId } })).body.role).toBe('installer');
   expect((await invited.ask(getMe)).body.shops).toMatchObject([{ shopId: vessel.shopId, admin: false }]);
 });
 

@@ -57,12 +57,15 @@ it('a list longer than a page comes whole, page after page, by name', async () =
   const names = ['Avocet', 'Bittern', 'Curlew', 'Dunlin', 'Egret'];
   for (const name of names.toReversed()) await admin.ask(createVessel, { body: { shopId: admin.shopId, name } });
   const seen: string[] = [];
-  for (let after: string | null = ''; after !== null;) {
-    const { body } = await admin.ask(listVessels, { query: { limit: 2, ...(after === '' ? {} : { after }) } });
+  const page = async (after: string | null) =>
+    (await admin.ask(listVessels, { query: { limit: 2, ...(after === null ? {} : { after }) } })).body;
+  let next: string | null = null;
+  do {
+    const body: Awaited<ReturnType<typeof page>> = await page(next);
     expect(body.total).toBe(5);
     seen.push(...body.rows.map((row) => row.name));
-    after = body.next;
-  }
+    next = body.next;
+  } while (next !== null);
   expect(seen).toEqual(names);
 });
 
@@ -72,7 +75,7 @@ it('a file that was exported opens as a new vessel with the same drawing; a bad 
   const opened = await admin.ask(importVessel, { body: { shopId, file: JSON.stringify(file.body) } });
   const { design } = (await admin.ask(getDesign, { params: { vesselId: opened.body.vesselId } })).body;
   expect(design).toEqual(aSmallDesign());
-  const bad = structuredClone(file.body) as { runs: { w1: { lengthM: number } } };
+  const bad = structuredClone(file.body) as unknown as { runs: { w1: { lengthM: number } } };
   bad.runs.w1.lengthM = -1;
   const refused = await admin.ask(importVessel, { body: { shopId, file: JSON.stringify(bad) } });
   expect(refused.problem).toMatchObject({
