@@ -8,20 +8,27 @@ import { HOP_RADIUS } from './run-path.ts';
  */
 export function findHops(runs: readonly (readonly Point[])[]): Point[][] {
   const hops: Point[][] = runs.map(() => []);
-  const segments = runs.flatMap((points, run) =>
-    points.slice(1).map((to, i): Segment => ({ run, from: points[i]!, to })),
-  );
-  const level = segments.filter(({ from, to }) => from.y === to.y).sort((a, b) => a.from.y - b.from.y);
-  const upright = segments.filter(({ from, to }) => from.x === to.x);
-  const rows = level.map((segment) => segment.from.y);
+  const level: Segment[] = [];
+  const upright: Segment[] = [];
+  runs.forEach((points, run) => {
+    for (let i = 1; i < points.length; i++) {
+      const [from, to] = [points[i - 1]!, points[i]!];
+      if (from.y === to.y)
+        level.push({ run, from, to, line: from.y, start: Math.min(from.x, to.x), end: Math.max(from.x, to.x) });
+      else upright.push({ run, from, to, line: from.x, start: Math.min(from.y, to.y), end: Math.max(from.y, to.y) });
+    }
+  });
+  level.sort((a, b) => a.line - b.line);
+  const rows = Float64Array.from(level, ({ line }) => line);
+  const starts = Float64Array.from(level, ({ start }) => start);
+  const ends = Float64Array.from(level, ({ end }) => end);
 
   for (const up of upright) {
-    const top = Math.min(up.from.y, up.to.y);
-    const bottom = Math.max(up.from.y, up.to.y);
-    for (let i = firstAbove(rows, top); i < level.length && rows[i]! < bottom; i++) {
+    for (let i = firstAbove(rows, up.start); i < rows.length && rows[i]! < up.end; i++) {
+      if (up.line <= starts[i]! || up.line >= ends[i]!) continue;
       const flat = level[i]!;
-      if (flat.run === up.run || !crosses(flat, up)) continue;
-      const at = { x: up.from.x, y: flat.from.y };
+      if (flat.run === up.run) continue;
+      const at = { x: up.line, y: flat.line };
       const [later, earlier] = flat.run > up.run ? [flat, up] : [up, flat];
       if (hasRoom(later, at)) hops[later.run]!.push(at);
       else if (hasRoom(earlier, at)) hops[earlier.run]!.push(at);
@@ -35,10 +42,10 @@ interface Segment {
   readonly run: number;
   readonly from: Point;
   readonly to: Point;
-}
-
-function crosses(flat: Segment, up: Segment): boolean {
-  return up.from.x > Math.min(flat.from.x, flat.to.x) && up.from.x < Math.max(flat.from.x, flat.to.x);
+  /** The row of a level one, the column of an upright one, and its reach along it. */
+  readonly line: number;
+  readonly start: number;
+  readonly end: number;
 }
 
 function hasRoom({ from, to }: Segment, at: Point): boolean {
@@ -48,7 +55,7 @@ function hasRoom({ from, to }: Segment, at: Point): boolean {
 }
 
 /** Index of the first row below `value` on the page. */
-function firstAbove(rows: readonly number[], value: number): number {
+function firstAbove(rows: Float64Array, value: number): number {
   let low = 0;
   let high = rows.length;
   while (low < high) {

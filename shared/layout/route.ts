@@ -1,12 +1,20 @@
-import type { Point } from '#shared/kinds/place.ts';
+import type { Box, Point } from '#shared/kinds/place.ts';
 
+import { placeOf } from './device-place.ts';
 import { findPath, type Direction, type PathEnd } from './find-path.ts';
-import { addRun, nodeAt, pointOf, type RouteGrid } from './route-grid.ts';
+import { addRun, COST, nodeAt, pointOf, type RouteGrid } from './route-grid.ts';
 import type { RunEnd, SheetRun } from './run-ends.ts';
 
 /** The square corners of a run on a grid that knows all that is in its way; the run is then in the way of the next. */
 export function routeRun(grid: RouteGrid, { run, from, to }: SheetRun): Point[] {
   if (from === null || to === null) return [];
+  if (run.bends === undefined || run.bends.length === 0) {
+    const straight = straightRoute(grid, from, to);
+    if (straight !== null) {
+      addRun(grid, straight);
+      return straight;
+    }
+  }
   const stops = [...(run.bends ?? []).map((bend) => ({ node: nodeAt(grid, bend) })), pathEnd(grid, to)];
   let leg: PathEnd = pathEnd(grid, from);
   const nodes = [leg.node];
@@ -23,6 +31,26 @@ export function routeRun(grid: RouteGrid, { run, from, to }: SheetRun): Point[] 
   );
   addRun(grid, points);
   return points;
+}
+
+/** Whoever puts two terminals in line means a straight run, though it leave its symbol along the edge. */
+function straightRoute(grid: RouteGrid, from: RunEnd, to: RunEnd): Point[] | null {
+  const [a, b] = [placeOnly(from.terminal), placeOnly(to.terminal)];
+  const isLevel = a.y === b.y;
+  if (isLevel === (a.x === b.x)) return null;
+  const [start, end] = [nodeAt(grid, a), nodeAt(grid, b)];
+  const stride = isLevel ? 1 : grid.columns;
+  const along = isLevel ? grid.level : grid.upright;
+  const boxes = [placeOf(from.device).box, placeOf(to.device).box];
+  for (let node = Math.min(start, end) + stride; node < Math.max(start, end); node += stride) {
+    if (along[node]! > 0 || grid.corner[node]! > 0 || grid.cost[node]! >= COST.offSheet) return null;
+    if (grid.cost[node]! >= COST.edge && !boxes.some((box) => touches(box, pointOf(grid, node)))) return null;
+  }
+  return [a, b];
+}
+
+function touches({ x, y, width, height }: Box, point: Point): boolean {
+  return point.x >= x && point.x <= x + width && point.y >= y && point.y <= y + height;
 }
 
 function placeOnly({ x, y }: Point): Point {

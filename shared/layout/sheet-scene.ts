@@ -4,7 +4,16 @@ import type { Design, Device, EntityId, Run, Sheet } from '#shared/model/design.
 import { coreWidth, OUTLINE } from './core-width.ts';
 import { placeOf } from './device-place.ts';
 import { cautionBox, frameBox, paperSize, titleBlockBox } from './paper.ts';
-import { addCost, addDevice, addOffSheet, addTerminal, COST, makeGrid, type RouteGrid } from './route-grid.ts';
+import {
+  addCost,
+  addDevice,
+  addOffSheet,
+  addTerminal,
+  copyGrid,
+  COST,
+  makeGrid,
+  type RouteGrid,
+} from './route-grid.ts';
 import type { SheetRun } from './run-ends.ts';
 import { HOP_RADIUS } from './run-path.ts';
 import { flagBox } from './stubs.ts';
@@ -16,9 +25,7 @@ export const NOTE = { size: 9, line: 11, width: 160 };
 
 /** The sheet before anything is routed: its devices, notes and zones in the way of runs. */
 export function gridOf(design: Design, sheet: Sheet, devices: readonly Device[]): RouteGrid {
-  const { width, height } = paperSize(sheet);
-  const grid = makeGrid(width, height);
-  addOffSheet(grid, frameBox(sheet), [titleBlockBox(sheet), cautionBox(sheet)]);
+  const grid = copyGrid(emptyGrid(sheet));
   for (const device of devices) {
     const { box, terminals } = placeOf(device);
     addDevice(grid, box);
@@ -26,6 +33,20 @@ export function gridOf(design: Design, sheet: Sheet, devices: readonly Device[])
   }
   for (const note of notesOf(design, sheet.id)) addCost(grid, note, COST.text);
   for (const name of zoneNamesOf(design, sheet.id)) addCost(grid, name, COST.text);
+  return grid;
+}
+
+const emptyGrids = new Map<string, RouteGrid>();
+
+/** Each paper's once: most of its squares are off any device. */
+function emptyGrid(sheet: Sheet): RouteGrid {
+  const { width, height } = paperSize(sheet);
+  const paper = `${width} ${height}`;
+  const kept = emptyGrids.get(paper);
+  if (kept !== undefined) return kept;
+  const grid = makeGrid(width, height);
+  addOffSheet(grid, frameBox(sheet), [titleBlockBox(sheet), cautionBox(sheet)]);
+  emptyGrids.set(paper, grid);
   return grid;
 }
 

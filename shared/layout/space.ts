@@ -32,6 +32,30 @@ export function take(space: Space, box: Box, weight: number, owner?: string): vo
   });
 }
 
+/** Gives a place back: what was taken there for that owner with that weight. */
+export function release(space: Space, box: Box, weight: number, owner: string): void {
+  eachCell(box, (key) => {
+    const cell = space.cells.get(key);
+    const at = cell?.findIndex(
+      (taken) => taken.owner === owner && taken.weight === weight && isSameBox(taken.box, box),
+    );
+    if (cell !== undefined && at !== undefined && at >= 0) cell.splice(at, 1);
+  });
+}
+
+function isSameBox(a: Box, b: Box): boolean {
+  return a.x === b.x && a.y === b.y && a.width === b.width && a.height === b.height;
+}
+
+/** Everything that stands in `box`, each once. */
+export function standing(space: Space, box: Box): Taken[] {
+  const found = new Set<Taken>();
+  eachCell(box, (key) => {
+    for (const taken of space.cells.get(key) ?? []) if (overlaps(taken.box, box)) found.add(taken);
+  });
+  return [...found];
+}
+
 /** The segments of a run, as wide as it is drawn. */
 export function takeRun(
   space: Space,

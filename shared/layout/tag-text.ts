@@ -1,7 +1,17 @@
 import type { Device } from '#shared/model/design.ts';
 
 /** What stands beside a device: its mark, its name, its rating. At most three lines. */
-export function tagLines(device: Device): string[] {
+export function tagLines(device: Device): readonly string[] {
+  const kept = known.get(device);
+  if (kept !== undefined) return kept;
+  const lines = linesOf(device);
+  known.set(device, lines);
+  return lines;
+}
+
+const known = new WeakMap<Device, readonly string[]>();
+
+function linesOf(device: Device): string[] {
   const { kind } = device;
   const mark = device.mark?.trim() ?? '';
   const rating = ratingLines(device);

@@ -3,7 +3,7 @@ import type { Device } from '#shared/model/design.ts';
 
 import { placeOf } from './device-place.ts';
 import type { TagLayout } from './sheet-layout.ts';
-import { conflict, grow, take, WEIGHT, type Space } from './space.ts';
+import { conflict, grow, release, take, WEIGHT, type Space } from './space.ts';
 import { tagLines } from './tag-text.ts';
 import { monoWidth, textWidth } from './text-width.ts';
 
@@ -15,30 +15,53 @@ export const TAG = { markSize: 11.5, textSize: 9.5, line: 11, gap: 8, ascent: 9,
  */
 export function placeTags(space: Space, devices: readonly Device[]): Map<string, TagLayout> {
   const waiting = devices.flatMap((device) => {
-    const lines = tagLines(device);
-    if (lines.every((line) => line === '')) return [];
-    const places = candidates(device, lines);
-    const free = places.filter((tag) => conflict(space, tag.box, device.id) < 1).length;
-    return [{ device, places, free }];
+    if (tagLines(device).every((line) => line === '')) return [];
+    const near = placesOf(device).slice(0, FIRST_CHOICES);
+    return [{ device, free: near.filter((tag) => conflict(space, tag.box, device.id) < 1).length }];
   });
   const tags = new Map<string, TagLayout>();
-  for (const { device, places } of waiting.sort((a, b) => a.free - b.free)) {
-    const tag = leastHiding(space, device, places);
-    if (tag === undefined) continue;
-    tags.set(device.id, tag);
-    take(space, grow(tag.box, 2), WEIGHT.text, device.id);
+  for (const { device } of waiting.sort((a, b) => a.free - b.free)) {
+    const tag = placeTag(space, device);
+    if (tag !== null) tags.set(device.id, tag);
   }
   return tags;
 }
 
-function leastHiding(space: Space, device: Device, places: readonly TagLayout[]): TagLayout | undefined {
+/** How many of a device's places tell how hard it is to please. */
+const FIRST_CHOICES = 8;
+
+/** Places the tag of one device and takes the room; with `onlyFree`, none unless it hides nothing. */
+export function placeTag(space: Space, device: Device, onlyFree = false): TagLayout | null {
   let best: { tag: TagLayout; cost: number } | undefined;
-  for (const [i, tag] of places.entries()) {
+  for (const [i, tag] of placesOf(device).entries()) {
     const cost = conflict(space, tag.box, device.id) + i * 0.001;
-    if (cost < 1) return tag;
     if (best === undefined || cost < best.cost) best = { tag, cost };
+    if (cost < 1) break;
   }
-  return best?.tag;
+  if (best === undefined || (onlyFree && best.cost >= 1)) return null;
+  takeTag(space, best.tag);
+  return best.tag;
+}
+
+export function takeTag(space: Space, tag: TagLayout): void {
+  take(space, grow(tag.box, TAG_CLEAR), WEIGHT.text, tag.deviceId);
+}
+
+export function releaseTag(space: Space, tag: TagLayout): void {
+  release(space, grow(tag.box, TAG_CLEAR), WEIGHT.text, tag.deviceId);
+}
+
+const TAG_CLEAR = 2;
+
+const known = new WeakMap<Device, readonly TagLayout[]>();
+
+/** The places round a device, the best first; they change only with the device. */
+export function placesOf(device: Device): readonly TagLayout[] {
+  const kept = known.get(device);
+  if (kept !== undefined) return kept;
+  const places = candidates(device, tagLines(device));
+  known.set(device, places);
+  return places;
 }
 
 function candidates(device: Device, lines: readonly string[]): TagLayout[] {
@@ -150,7 +173,23 @@ function tagAt(
   return { deviceId: device.id, x, y, anchor, lines, ...(inline && { inline: true as const }), box };
 }
 
-function measure(lines: readonly string[], inline: boolean): { width: number; rows: number } {
+const measured = new WeakMap<readonly string[], { readonly inline?: Measure; readonly stacked?: Measure }>();
+
+function measure(lines: readonly string[], inline: boolean): Measure {
+  const kept = measured.get(lines);
+  const found = inline ? kept?.inline : kept?.stacked;
+  if (found !== undefined) return found;
+  const fresh = measureAnew(lines, inline);
+  measured.set(lines, { ...kept, [inline ? 'inline' : 'stacked']: fresh });
+  return fresh;
+}
+
+interface Measure {
+  readonly width: number;
+  readonly rows: number;
+}
+
+function measureAnew(lines: readonly string[], inline: boolean): Measure {
   const mark = monoWidth(lines[0] ?? '', TAG.markSize);
   const widths = lines.slice(1).map((line) => textWidth(line, TAG.textSize));
   if (!inline) return { width: Math.max(mark, ...widths), rows: lines.length };
