@@ -1,5 +1,5 @@
 import { hash, verify } from '@node-rs/argon2';
-import { betterAuth } from 'better-auth';
+import { betterAuth } from 'better-auth/minimal';
 import { drizzleAdapter } from 'better-auth/adapters/drizzle';
 import { APIError, createAuthMiddleware } from 'better-auth/api';
 import { fromNodeHeaders } from 'better-auth/node';

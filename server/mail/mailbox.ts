@@ -2,7 +2,6 @@ import { mkdir, readdir, readFile, rename, rm, writeFile } from 'node:fs/promise
 import type { AddressInfo } from 'node:net';
 import { join } from 'node:path';
 
-import { simpleParser } from 'mailparser';
 import { SMTPServer } from 'smtp-server';
 
 import { newId } from '#server/db/ids.ts';
@@ -41,7 +40,9 @@ export async function startMailIntake(folder: string): Promise<{ smtpUrl: string
     disabledCommands: ['STARTTLS', 'AUTH'],
     size: 1_000_000,
     onData(stream, _session, callback) {
-      simpleParser(stream)
+      // Loaded with the first mail: loading it is a good part of a start.
+      import('mailparser')
+        .then(({ simpleParser }) => simpleParser(stream))
         .then(async (mail) => {
           const to = Array.isArray(mail.to) ? mail.to[0] : mail.to;
           const text = mail.text ?? '';
