@@ -79,6 +79,15 @@ export class CanvasBench {
     return { x: box.x + box.width / 2, y: box.y + box.height / 2 };
   }
 
+  /** The middle of a run's longest leg, however it is routed. */
+  onRun(mark: string): Point {
+    const { points } = this.canvas.getState().layout.runs[this.run(mark).id]!;
+    const legs = points.slice(1).map((to, i) => ({ from: points[i]!, to }));
+    const length = ({ from, to }: { from: Point; to: Point }) => Math.hypot(to.x - from.x, to.y - from.y);
+    const { from, to } = legs.toSorted((a, b) => length(b) - length(a))[0]!;
+    return { x: (from.x + to.x) / 2, y: (from.y + to.y) / 2 };
+  }
+
   move(to: string | Point): this {
     this.at = typeof to === 'string' ? this.place(to) : to;
     return this.tell('move');

@@ -91,8 +91,7 @@ describe('selecting', () => {
 
   it('takes a run by a click on its line', () => {
     const b = bench();
-    const [a, c] = b.canvas.getState().layout.runs['w1']!.points.slice(1, 3);
-    expect(b.click({ x: (a!.x + c!.x) / 2, y: (a!.y + c!.y) / 2 }).selected).toEqual(['W1']);
+    expect(b.click(b.onRun('W1')).selected).toEqual(['W1']);
   });
 
   it('takes with a marquee what lies wholly inside', () => {
@@ -117,8 +116,7 @@ describe('moving', () => {
 
   it('pulls a bend out of a run and keeps it where it was dropped; a double click frees it', () => {
     const b = bench();
-    const [a, c] = b.canvas.getState().layout.runs['w1']!.points.slice(1, 3);
-    b.drag({ x: (a!.x + c!.x) / 2, y: (a!.y + c!.y) / 2 }, { x: 401, y: 451 });
+    b.drag(b.onRun('W1'), { x: 401, y: 451 });
     expect(b.run('W1').bends).toEqual([{ x: 400, y: 448 }]);
     b.drag({ x: 400, y: 448 }, { x: 400, y: 400 });
     expect(b.run('W1').bends).toEqual([{ x: 400, y: 400 }]);
