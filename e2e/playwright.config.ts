@@ -26,6 +26,8 @@ export default defineConfig({
     locale: 'en-US',
     timezoneId: 'UTC',
     reducedMotion: 'reduce',
+    actionTimeout: 15_000,
+    navigationTimeout: 20_000,
     screenshot: 'only-on-failure',
     trace: 'retain-on-failure',
     launchOptions: {
@@ -41,16 +43,20 @@ export default defineConfig({
       ],
     },
   },
-  webServer: {
-    command: 'node e2e/fixtures/serve.mjs',
-    cwd: '..',
-    url: `${address}/api/server`,
-    timeout: 120_000,
-    reuseExistingServer: false,
-    stdout: 'ignore',
-    stderr: 'pipe',
-    gracefulShutdown: { signal: 'SIGTERM', timeout: 20_000 },
-  },
+  // With E2E_RUNNING the journeys are run against a server that stands already, started by fixtures/serve.mjs.
+  webServer:
+    process.env['E2E_RUNNING'] !== undefined
+      ? undefined
+      : {
+          command: 'node e2e/fixtures/serve.mjs',
+          cwd: '..',
+          url: `${address}/api/server`,
+          timeout: 120_000,
+          reuseExistingServer: false,
+          stdout: 'ignore',
+          stderr: 'pipe',
+          gracefulShutdown: { signal: 'SIGTERM', timeout: 20_000 },
+        },
 });
 
 function freePort(): Promise<number> {

@@ -28,7 +28,7 @@ export function placeDevice(design: Design, options: PlaceOptions, newId: NewId)
     id,
     kind: kind.kind,
     mark: newMarks(design).device({ kind: kind.kind, symbol }),
-    name: offer.title,
+    name: nameOf(kind, offer),
     ratings: { ...offer.ratings },
     sheetId: options.sheetId,
     ...snap(options.at),
@@ -38,6 +38,11 @@ export function placeDevice(design: Design, options: PlaceOptions, newId: NewId)
     symbol,
   });
   return { label: `Place ${callDevice(device)}`, patches: [set(['devices', id], device)], deviceId: id };
+}
+
+/** What it is, without the figures that its ratings say beside it. A fuse or breaker is known by its rating alone. */
+function nameOf(kind: Kind, offer: Kind['offers'][number]): string | undefined {
+  return kind.drawer === 'Protect' ? undefined : offer.title.split(',')[0];
 }
 
 export function offerOf(partId: string): { kind: Kind; offer: Kind['offers'][number] } | undefined {

@@ -55,7 +55,6 @@ export function placeFusePanel(
       id: newId(),
       kind: 'fuse',
       mark: marks.device({ kind: 'fuse' }),
-      name: fuse.offer.title,
       ratings: { ...fuse.offer.ratings },
       sheetId: options.sheetId,
       ...placeOn(terminalAt(bar, terminal)!),
