@@ -10,6 +10,7 @@ import { useOpenDesign } from '#src/design/open-design.ts';
 import { KeepingDialogs } from '#src/features/keeping/keeping-dialogs.tsx';
 import { IssueRevision } from '#src/features/revisions/issue-revision.tsx';
 import { VesselHead } from '#src/features/vessels/vessel-head.tsx';
+import { useUndoKeys } from '#src/features/vessels/use-undo-keys.ts';
 import { vesselQuery } from '#src/features/vessels/vessels-api.ts';
 import { Hatch } from '#src/ui/scale.tsx';
 
@@ -53,6 +54,7 @@ export function VesselLayout() {
 
 function VesselFrame({ me, vessel, isDrawing }: VesselContext & { readonly isDrawing: boolean }) {
   const profile = useOpenDesign((open) => basisOf(open.design).profile);
+  useUndoKeys(!isDrawing);
   return (
     <div className="frame" data-profile={profile}>
       <a className="skip-link" href="#page">

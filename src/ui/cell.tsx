@@ -69,7 +69,7 @@ export function EditCell<Value>({
   const [text, setText] = useState(value);
   const [wrong, setWrong] = useState<string | null>(null);
   const typing = useRef(false);
-  const saidId = useId();
+  const id = useId();
 
   useEffect(() => {
     if (!typing.current) setText(value);
@@ -122,15 +122,15 @@ export function EditCell<Value>({
         className,
       )}
     >
-      <small>{caption}</small>
+      <small id={`${id}caption`}>{caption}</small>
       <span className="row">
         <input
           className="in"
           value={text}
+          data-kept={text === value || undefined}
           placeholder={placeholder}
-          aria-label={label}
+          {...nameOf(id, label, wrong ?? hint)}
           aria-invalid={wrong !== null || undefined}
-          aria-describedby={wrong !== null ? saidId : undefined}
           inputMode={inputMode}
           autoComplete="off"
           spellCheck={false}
@@ -146,11 +146,15 @@ export function EditCell<Value>({
         {unit !== undefined && unit !== '' && <span className="unit">{unit}</span>}
       </span>
       {wrong !== null && (
-        <span className="said" id={saidId} role="alert">
+        <span className="said" id={`${id}says`} role="alert">
           {wrong}
         </span>
       )}
-      {hint !== undefined && wrong === null && <span className="hint">{hint}</span>}
+      {hint !== undefined && wrong === null && (
+        <span className="hint" id={`${id}says`}>
+          {hint}
+        </span>
+      )}
     </label>
   );
 }
@@ -183,14 +187,15 @@ export function PickCell({
   /** The value shown is the default and nobody has chosen it. */
   readonly isDefault?: boolean;
 }) {
+  const id = useId();
   return (
     <label className={join('cell edit pick', mono && 'mono', on && 'on', big && 'big', alone && 'alone', className)}>
-      <small>{caption}</small>
+      <small id={`${id}caption`}>{caption}</small>
       <span className="row">
         <select
           className={join('in', isDefault && 'default')}
           value={value}
-          aria-label={label}
+          {...nameOf(id, label, hint)}
           onChange={(event) => onPick(event.currentTarget.value)}
         >
           {choices.map((choice) => (
@@ -200,9 +205,22 @@ export function PickCell({
           ))}
         </select>
       </span>
-      {hint !== undefined && <span className="hint">{hint}</span>}
+      {hint !== undefined && (
+        <span className="hint" id={`${id}says`}>
+          {hint}
+        </span>
+      )}
     </label>
   );
+}
+
+/** A field is called by its caption alone; what stands below it describes it, so that names stay short when read out. */
+function nameOf(id: string, label: string | undefined, says: ReactNode) {
+  return {
+    'aria-label': label,
+    'aria-labelledby': label === undefined ? `${id}caption` : undefined,
+    'aria-describedby': says === undefined ? undefined : `${id}says`,
+  };
 }
 
 function join(...names: readonly (string | false | null | undefined)[]): string {

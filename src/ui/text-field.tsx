@@ -19,23 +19,24 @@ export function TextField({
   readonly big?: boolean;
   readonly ref?: Ref<HTMLInputElement>;
 }) {
-  const saidId = useId();
+  const id = useId();
   const says = wrong ?? hint;
   return (
     <label className={['cell edit', big && 'big', alone && 'alone', wrong && 'wrong'].filter(Boolean).join(' ')}>
-      <small>{caption}</small>
+      <small id={`${id}caption`}>{caption}</small>
       <span className="row">
         <input
           {...rest}
           ref={ref}
           className="in"
+          aria-labelledby={`${id}caption`}
           aria-invalid={wrong !== undefined || undefined}
-          aria-describedby={says === undefined ? undefined : saidId}
+          aria-describedby={says === undefined ? undefined : `${id}says`}
         />
         {unit !== undefined && <span className="unit">{unit}</span>}
       </span>
       {says !== undefined && (
-        <span className={wrong === undefined ? 'hint' : 'said'} id={saidId}>
+        <span className={wrong === undefined ? 'hint' : 'said'} id={`${id}says`}>
           {says}
         </span>
       )}

@@ -90,7 +90,6 @@ export function PeoplePage({
                     as {invitation.role}, by {invitation.invitedBy} <When at={invitation.invitedAt} />
                   </span>
                 </div>
-                <span className="people-role" />
                 {mayManage && (
                   <Button
                     onClick={() => withdraw.mutate(invitation.invitationId)}

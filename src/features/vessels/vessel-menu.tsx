@@ -5,6 +5,7 @@ import { Link, useNavigate } from 'react-router';
 import { may } from '#shared/access/matrix.ts';
 import { exportDesign } from '#shared/api/design.ts';
 import type { VesselSummary } from '#shared/api/vessels.ts';
+import { useOpenDesign } from '#src/design/open-design.ts';
 import { addressOf } from '#src/lib/call.ts';
 import { changeReaderSettings, useReaderSettings, type ReaderSettings } from '#src/lib/reader-settings.ts';
 import { signOut } from '#src/lib/session.ts';
@@ -49,6 +50,7 @@ export function VesselMenu({ vessel, myName }: { readonly vessel: VesselSummary;
   return (
     <>
       <Menu trigger={<Button aria-label={`Menu of ${vessel.name}`}>Menu</Button>}>
+        {mayEdit && <UndoLines />}
         <MenuLink>
           <Link to={`/vessels/${vesselId}/basis`}>Basis and zones</Link>
         </MenuLink>
@@ -116,6 +118,25 @@ export function VesselMenu({ vessel, myName }: { readonly vessel: VesselSummary;
       />
       <RenameVessel vessel={vessel} open={dialog === 'rename'} onClose={() => setDialog(null)} />
       {file !== null && <ReplaceDrawing file={file} onClose={() => setFile(null)} />}
+    </>
+  );
+}
+
+/** What undo would take back, by name: for whoever has no keyboard at hand, or wants to know first. */
+function UndoLines() {
+  const canUndo = useOpenDesign((open) => open.canUndo);
+  const canRedo = useOpenDesign((open) => open.canRedo);
+  const undo = useOpenDesign((open) => open.undo);
+  const redo = useOpenDesign((open) => open.redo);
+  return (
+    <>
+      <MenuLine kbd="Ctrl Z" off={canUndo === null} onChoose={undo}>
+        <span className="menu-what">Undo{canUndo !== null && `: ${canUndo}`}</span>
+      </MenuLine>
+      <MenuLine kbd="Ctrl Y" off={canRedo === null} onChoose={redo}>
+        <span className="menu-what">Redo{canRedo !== null && `: ${canRedo}`}</span>
+      </MenuLine>
+      <MenuRule />
     </>
   );
 }
