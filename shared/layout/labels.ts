@@ -40,14 +40,19 @@ export function placeLabel(
     bestLabel(space, run, besideRun(segments, measures)) ??
     (code === '' ? null : bestLabel(space, run, besideRun(segments, bare)));
   if (beside !== null && beside.cost < 1) return beside.label;
-  const longest = [...segments].sort((a, b) => b.length - a.length).slice(0, 2);
-  const aside = bestLabel(
-    space,
-    run,
-    longest.flatMap((segment) => onLeader(segment, bare)),
-    beside?.cost,
-  );
+  const aside = bestLabel(space, run, onLeader(segments, bare), beside?.cost);
   return (aside ?? beside)?.label ?? null;
+}
+
+/** All places beside a run, with its code letters and without, the best first. */
+export function* placesBeside(run: Run, code: string, points: readonly Point[]): Generator<LabelLayout> {
+  const text = labelText(run);
+  const off = coreWidth(run) / 2 + OUTLINE + LABEL.clear;
+  const segments = segmentsOf(points);
+  for (const letters of code === '' ? [''] : [code, '']) {
+    const places = besideRun(segments, { text, code: letters, width: labelWidth(text, letters), off });
+    for (const { label } of places) yield label;
+  }
 }
 
 /** The first candidate that is free, else the one that hides least; null when none hides less than `below`. */
@@ -65,20 +70,34 @@ function bestLabel(space: Space, run: Run, candidates: Iterable<Candidate>, belo
   return best;
 }
 
-/** The code letters at the end away from the label, where the run is long enough to need them again. */
-export function placeCode(
+/**
+ * The code letters at both ends of a run, but for one its label (with the letters behind it) is near. Each is handed
+ * on as it is found, so that the room is taken before the next is looked for.
+ */
+export function* placeCodes(
   space: Space,
   run: Run,
   code: string,
   points: readonly Point[],
   label: LabelLayout | null,
-): CodeLayout | null {
-  if (code === '' || label === null || points.length < 2) return null;
+): Generator<CodeLayout> {
+  if (code === '' || label === null || points.length < 2) return;
+  const middle = { x: label.box.x + label.box.width / 2, y: label.box.y + label.box.height / 2 };
   const first = points[0]!;
   const last = points.at(-1)!;
-  const middle = { x: label.box.x + label.box.width / 2, y: label.box.y + label.box.height / 2 };
-  const atStart = distance(middle, first) > distance(middle, last);
-  const [end, next] = atStart ? [first, points[1]!] : [last, points.at(-2)!];
+  for (const [end, next] of [
+    [first, points[1]!],
+    [last, points.at(-2)!],
+  ] as const) {
+    if (label.code !== '' && distance(middle, end) < NEAR_END) continue;
+    const found = placeCode(space, run, code, end, next);
+    if (found !== null) yield found;
+  }
+}
+
+const NEAR_END = 88;
+
+function placeCode(space: Space, run: Run, code: string, end: Point, next: Point): CodeLayout | null {
   const off = coreWidth(run) / 2 + OUTLINE + LABEL.clear;
   const width = monoWidth(code, CODE_SIZE);
   for (const inset of [8, 16, 24, 32]) {
@@ -146,12 +165,14 @@ function segmentsOf(points: readonly Point[]): Segment[] {
   return points.slice(1).map((to, i) => ({ from: points[i]!, to, length: distance(points[i]!, to) }));
 }
 
+/** The longest straight first, on its better side, then the others; and then on their other sides. */
 function* besideRun(segments: readonly Segment[], measures: Measures): Generator<Candidate> {
-  for (const [i, segment] of segments.entries()) {
+  const longest = [...segments].sort((a, b) => b.length - a.length);
+  for (const [i, segment] of longest.entries()) {
     if (segment.from.x === segment.to.x) yield* besideUpright(segment, measures, i * 0.05, 'start');
     else yield* overLevel(segment, measures, i * 0.05, 'above');
   }
-  for (const [i, segment] of segments.entries()) {
+  for (const [i, segment] of longest.entries()) {
     if (segment.from.x === segment.to.x) yield* besideUpright(segment, measures, 0.3 + i * 0.05, 'end');
     else yield* overLevel(segment, measures, 0.4 + i * 0.05, 'below');
   }
@@ -191,21 +212,29 @@ function* overLevel(segment: Segment, measures: Measures, cost: number, side: 'a
   }
 }
 
-/** Off the run's middle, up and to the right first, then all round and further out. */
-function onLeader(segment: Segment, measures: Measures): Candidate[] {
-  const at = { x: (segment.from.x + segment.to.x) / 2, y: (segment.from.y + segment.to.y) / 2 };
-  // never along the run itself
-  const isUpright = segment.from.x === segment.to.x;
-  return [16, 24, 32, 44, 56, 72, 88].flatMap((out, ring) =>
-    AROUND.filter(([dx, dy]) => (isUpright ? dx !== 0 : dy !== 0)).map(([dx, dy], i) => {
-      const x = at.x + dx * out;
-      const y = at.y + dy * out;
-      const left = dx === 0 ? x - measures.width / 2 : x;
-      const label = labelAt(left, y + 3.5, dx < 0 ? 'end' : 'start', measures);
-      const foot = { x: dx > 0 ? x - 2 : dx < 0 ? x + 2 : x, y: dy === 0 ? y : dy < 0 ? y + 5 : y - 5 };
-      return { label: { ...label, leader: [foot, at] as const }, cost: 1 + ring * 0.2 + i * 0.02 };
-    }),
+/** Off the run, up and to the right first, then all round; as near as there is room, never along the run itself. */
+function* onLeader(segments: readonly Segment[], measures: Measures): Generator<Candidate> {
+  const longest = [...segments].sort((a, b) => b.length - a.length).slice(0, 3);
+  const feet = longest.flatMap(({ from, to, length }) =>
+    (length < 32 ? [0.5] : [0.5, 0.3, 0.7, 0.15, 0.85]).map((part) => ({
+      x: from.x + (to.x - from.x) * part,
+      y: from.y + (to.y - from.y) * part,
+      isUpright: from.x === to.x,
+    })),
   );
+  for (const [ring, out] of [16, 24, 32, 44, 56, 72, 88].entries()) {
+    for (const at of feet) {
+      for (const [i, [dx, dy]] of AROUND.entries()) {
+        if ((at.isUpright ? dx : dy) === 0) continue;
+        const x = at.x + dx * out;
+        const y = at.y + dy * out;
+        const left = dx === 0 ? x - measures.width / 2 : x;
+        const label = labelAt(left, y + 3.5, dx < 0 ? 'end' : 'start', measures);
+        const foot = { x: dx > 0 ? x - 2 : dx < 0 ? x + 2 : x, y: dy === 0 ? y : dy < 0 ? y + 5 : y - 5 };
+        yield { label: { ...label, leader: [foot, { x: at.x, y: at.y }] as const }, cost: 1 + ring * 0.2 + i * 0.02 };
+      }
+    }
+  }
 }
 
 const AROUND = [

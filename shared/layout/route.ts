@@ -1,12 +1,48 @@
-import type { Box, Point } from '#shared/kinds/place.ts';
+import type { Point } from '#shared/kinds/place.ts';
+import type { Design, EntityId } from '#shared/model/design.ts';
 
 import { placeOf } from './device-place.ts';
 import { findPath, type Direction, type PathEnd } from './find-path.ts';
+import { rememberBends, touches } from './kept-route.ts';
 import { addRun, COST, nodeAt, pointOf, type RouteGrid } from './route-grid.ts';
 import type { RunEnd, SheetRun } from './run-ends.ts';
+import type { StubLayout } from './sheet-layout.ts';
+import { routeStub } from './stubs.ts';
+
+export interface Route {
+  readonly points: readonly Point[];
+  readonly stubs: readonly StubLayout[];
+}
+
+/** Short and straight runs first: they have the least choice. Each is then in the way of the next. */
+export function routeAll(design: Design, grid: RouteGrid, runs: readonly SheetRun[]): Map<EntityId, Route> {
+  const routes = new Map<EntityId, Route>();
+  const order = [...runs].sort((a, b) => reachOf(a) - reachOf(b));
+  for (const sheetRun of order) {
+    const route =
+      sheetRun.away === null ? { points: routeRun(grid, sheetRun), stubs: [] } : stubRoute(design, grid, sheetRun);
+    rememberBends(route.points, sheetRun.run);
+    routes.set(sheetRun.run.id, route);
+  }
+  return routes;
+}
+
+function stubRoute(design: Design, grid: RouteGrid, sheetRun: SheetRun): Route {
+  const found = routeStub(design, grid, sheetRun);
+  return found === null ? { points: [], stubs: [] } : { points: found.points, stubs: [found.stub] };
+}
+
+/** Runs in a straight line first, then by distance; stubs when the sheet's own runs lie. */
+function reachOf({ from, to, run }: SheetRun): number {
+  if (from === null || to === null) return 1e6;
+  const dx = Math.abs(from.terminal.x - to.terminal.x);
+  const dy = Math.abs(from.terminal.y - to.terminal.y);
+  const bent = (run.bends?.length ?? 0) > 0 ? -1e5 : 0;
+  return bent + dx + dy + (dx === 0 || dy === 0 ? 0 : 1000);
+}
 
 /** The square corners of a run on a grid that knows all that is in its way; the run is then in the way of the next. */
-export function routeRun(grid: RouteGrid, { run, from, to }: SheetRun): Point[] {
+function routeRun(grid: RouteGrid, { run, from, to }: SheetRun): Point[] {
   if (from === null || to === null) return [];
   if (run.bends === undefined || run.bends.length === 0) {
     const straight = straightRoute(grid, from, to);
@@ -49,15 +85,11 @@ function straightRoute(grid: RouteGrid, from: RunEnd, to: RunEnd): Point[] | nul
   return [a, b];
 }
 
-function touches({ x, y, width, height }: Box, point: Point): boolean {
-  return point.x >= x && point.x <= x + width && point.y >= y && point.y <= y + height;
-}
-
 function placeOnly({ x, y }: Point): Point {
   return { x, y };
 }
 
-export function pathEnd(grid: RouteGrid, { terminal }: RunEnd): PathEnd {
+function pathEnd(grid: RouteGrid, { terminal }: RunEnd): PathEnd {
   return { node: nodeAt(grid, terminal), sides: terminal.sides };
 }
 

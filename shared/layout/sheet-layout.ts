@@ -19,8 +19,8 @@ export interface RunLayout {
   /** Points on the run where it hops over an earlier one. */
   readonly hops: readonly Point[];
   readonly label: LabelLayout | null;
-  /** Where the code letters of its colour stand at the other end than the label, when there is room. */
-  readonly code: CodeLayout | null;
+  /** The code letters of its colour at the ends its label is not near, where there is room. */
+  readonly codes: readonly CodeLayout[];
   /** A run between two sheets: the flags at its ends on this sheet. */
   readonly stubs: readonly StubLayout[];
 }

@@ -1,5 +1,5 @@
 import type { Box, Point } from '#shared/kinds/place.ts';
-import type { Design } from '#shared/model/design.ts';
+import type { Design, Device } from '#shared/model/design.ts';
 
 import { placeOf } from './device-place.ts';
 import { SIDE_DIRECTION, type Direction } from './find-path.ts';
@@ -19,8 +19,6 @@ export function routeStub(design: Design, grid: RouteGrid, { from, to, away }: S
   const sheet = away && design.sheets[away.sheetId];
   if (end === null || !away || !sheet) return null;
   const { terminal } = end;
-  const place = placeOf(away);
-  const middle = { x: place.box.x + place.box.width / 2, y: place.box.y + place.box.height / 2 };
 
   let best: { cost: number; heading: Direction; reach: number } | undefined;
   for (const heading of [0, 1, 2, 3] as const) {
@@ -40,12 +38,20 @@ export function routeStub(design: Design, grid: RouteGrid, { from, to, away }: S
   const stub: StubLayout = {
     ...centre,
     points: POINTS[onward],
-    text: `${sheet.number ?? 1}.${squareOf(sheet, middle)}`,
+    text: stubText(design, away),
     to: { sheetId: away.sheetId, deviceId: away.id },
   };
   addRun(grid, points);
   addCost(grid, flagBox(stub), COST.inside);
   return { points, stub };
+}
+
+/** Sheet and square of the other end. */
+export function stubText(design: Design, away: Device): string {
+  const sheet = design.sheets[away.sheetId];
+  const { box } = placeOf(away);
+  const middle = { x: box.x + box.width / 2, y: box.y + box.height / 2 };
+  return sheet === undefined ? '' : `${sheet.number ?? 1}.${squareOf(sheet, middle)}`;
 }
 
 export const FLAG = { width: 34, height: 14, uprightHeight: 17, point: 6 };

@@ -81,7 +81,7 @@ function analysisOfRun(run: ProvedRun): RunAnalysis {
       ...(device && { device: device.id }),
       ...(ratedA !== undefined && { ratedA }),
       ...(allowedRatingA !== undefined && { allowedRatingA }),
-      ...(stub && { stubM: stub.lengthM }),
+      ...(stub?.isLengthKnown && { stubM: stub.lengthM }),
       fromEnd,
     })),
     smallestSize: run.smallestSize,

@@ -3,7 +3,7 @@ import type { Device, EntityId } from '#shared/model/design.ts';
 import type { Patch } from '#shared/model/patch.ts';
 import type { Size } from '#shared/model/size.ts';
 import type { Proof, ProvedRun } from '#shared/solve/proof.ts';
-import { callOf } from '#shared/solve/ratings.ts';
+import { amountOf, callOf, ratingsOf } from '#shared/solve/ratings.ts';
 import { formatA } from '#shared/units/current.ts';
 
 /** What may be changed by a remedy: nothing that is locked. */
@@ -35,13 +35,12 @@ export function listOf(names: readonly string[]): string {
   return `${names.slice(0, -1).join(', ')} and ${names.at(-1)}`;
 }
 
-/** The runs a device protects, with what the profile lets stand ahead of each. */
+/** The runs a device protects, with what the profile lets it be rated ahead of each: less what stands beside it. */
 export function guardedBy(proof: Proof, device: EntityId): { run: ProvedRun; allowedRatingA: number }[] {
-  return proof.runs.flatMap((run) =>
-    run.protection.flatMap((end) =>
-      end.device?.id === device && end.allowedRatingA !== undefined
-        ? [{ run, allowedRatingA: end.allowedRatingA }]
-        : [],
-    ),
-  );
+  return (proof.guardedBy.get(device) ?? []).map(({ run, end }) => {
+    const besideA = [end.device!, ...(end.beside ?? [])]
+      .filter(({ id }) => id !== device)
+      .reduce((sum, each) => sum + (amountOf(ratingsOf(each), 'ratedA') ?? 0), 0);
+    return { run, allowedRatingA: end.allowedRatingA! - besideA };
+  });
 }

@@ -1,6 +1,6 @@
 import { kindOf } from '#shared/kinds/index.ts';
 import type { FullBasis } from '#shared/model/defaults.ts';
-import type { Design, Device, EntityId, Run } from '#shared/model/design.ts';
+import type { Design, Device, End, EntityId, Run } from '#shared/model/design.ts';
 
 import { otherEnd, type Network, type NetworkEdge, type RunEdge, type SourceEdge } from './network.ts';
 import { amountOf, ratingsOf } from './ratings.ts';
@@ -82,6 +82,12 @@ export function circuitsOf(network: Network, design: Design, _basis: FullBasis):
   const banks = banksOf(sources, wired);
   const bankByBattery = new Map(banks.flatMap((bank) => bank.batteries.map((battery) => [battery.id, bank] as const)));
   const signals = new Map<string, ReadonlySet<string>>();
+  // Where runs go on from a signal terminal it is a joint, and what it joins may carry anything.
+  const landings = new Map<string, number>();
+  for (const edge of network.edges) {
+    if (edge.type !== 'run') continue;
+    for (const end of [edge.run.from, edge.run.to]) landings.set(endKey(end), (landings.get(endKey(end)) ?? 0) + 1);
+  }
 
   return {
     network,
@@ -90,10 +96,17 @@ export function circuitsOf(network: Network, design: Design, _basis: FullBasis):
     nets,
     banks,
     bankOf: (battery) => bankByBattery.get(battery),
-    isSignal: (run) => [run.from, run.to].some((end) => signalTerminals(design, end.device, signals).has(end.terminal)),
+    isSignal: (run) =>
+      [run.from, run.to].some(
+        (end) => signalTerminals(design, end.device, signals).has(end.terminal) && landings.get(endKey(end)) === 1,
+      ),
     nominalVOf: (node) => voltages[netOfNode[node]!.index]!,
     islandOf: (net) => islands.rootOf(net.index),
   };
+}
+
+function endKey({ device, terminal }: End): string {
+  return `${device} ${terminal}`;
 }
 
 /** A conductor, with nothing in it that opens. */

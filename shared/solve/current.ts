@@ -52,7 +52,12 @@ export function designCurrents(
   charging: Flow,
   own: readonly SolvedFlow[],
   ampacities: ReadonlyMap<EntityId, Ampacity>,
-): { runs: Map<EntityId, DesignCurrent>; contactAt(edge: NetworkEdge): ContactCurrent } {
+): {
+  runs: Map<EntityId, DesignCurrent>;
+  contactAt(edge: NetworkEdge): ContactCurrent;
+  /** What the loads behind an edge ask for when all that lasts is on. */
+  demandOn(edge: NetworkEdge): number;
+} {
   const worst = new Map<EntityId, DesignCurrent>();
   const consider = (run: EntityId, amperes: number, mode: EntityId) => {
     const before = worst.get(run);
@@ -81,6 +86,7 @@ export function designCurrents(
   }
   return {
     runs: worst,
+    demandOn: (edge) => lastingOn(demanded, edge),
     contactAt(edge) {
       const lasting = literal.map(({ lastingAt }) => lastingAt(edge));
       const short = [demanded, ...literal].map(({ momentary }) => sumAt(momentary, edge));

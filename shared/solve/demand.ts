@@ -31,7 +31,8 @@ export function loadDemandOf(edge: LoadEdge): LoadDemand {
   const nominalV = amountOf(ratings, 'nominalV') ?? 12;
   const minV = amountOf(ratings, 'minV');
   const workingA = currentAt(element, nominalV);
-  const onMinutes = amountOf(ratings, 'onMinutes') ?? MOST_MOMENTARY_MINUTES;
+  const toldMinutes = amountOf(ratings, 'onMinutes') ?? 0;
+  const onMinutes = toldMinutes > 0 ? toldMinutes : MOST_MOMENTARY_MINUTES;
   return {
     edge,
     device,

@@ -23,6 +23,9 @@ export interface LoadDrop {
   readonly path: readonly Run[];
   /** What each run of the path adds, in the order of the path. */
   readonly voltsOf: readonly number[];
+  /** The way from the source to the load, and from the source's other pole to it. */
+  readonly feed: readonly PathStep[];
+  readonly back: readonly PathStep[];
   /** A path with a run whose length is not known has no verdict. */
   readonly isKnown: boolean;
 }
@@ -141,12 +144,11 @@ function dropOf(
   const [feed, back] = isSwitchedIn ? [supply.feed, supply.back] : [supply.widerFeed(), supply.widerBack()];
   if (!feed.reaches(load.edge.a) || !back.reaches(load.edge.b)) return undefined;
 
+  const out = feed.to(load.edge.a);
+  const home = back.to(load.edge.b);
   const steps: readonly (PathStep & { readonly sign: 1 | -1 })[] = [
-    ...feed.to(load.edge.a).map((step) => ({ ...step, sign: 1 as const })),
-    ...back
-      .to(load.edge.b)
-      .toReversed()
-      .map((step) => ({ ...step, sign: -1 as const })),
+    ...out.map((step) => ({ ...step, sign: 1 as const })),
+    ...home.toReversed().map((step) => ({ ...step, sign: -1 as const })),
   ];
   const isShort = load.demand === 'momentary' || load.demand === 'cranking';
   const ownA = isOn ? takenA : load.workingA;
@@ -183,6 +185,8 @@ function dropOf(
     dropClass,
     path: runs,
     voltsOf,
+    feed: out,
+    back: home,
     isKnown,
   };
 }

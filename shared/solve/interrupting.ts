@@ -51,7 +51,7 @@ export function interruptNeedOf(proof: Proof, device: Device): InterruptNeed | u
 
 /** Every bank that some position of the switches joins to the device. */
 function banksFeeding({ circuits }: Proof, device: Device): Bank[] {
-  const contact = circuits.network.edges.find((edge) => edge.type === 'contact' && edge.device.id === device.id);
+  const [contact] = circuits.network.contactsOf(device.id);
   if (!contact) return [];
   const net = circuits.netOf(contact.a);
   const sources = net.side === 'return' ? net.negatives : net.positives;

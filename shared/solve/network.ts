@@ -21,6 +21,8 @@ export interface Network {
   terminalsOf(device: Device): readonly string[];
   /** Whether a device is a piece of metal and nothing else: a busbar, a block, a bond. */
   isJoin(device: EntityId): boolean;
+  /** The ways through a switch, selector, fuse or breaker; none through anything else. */
+  contactsOf(device: EntityId): readonly ContactEdge[];
   /** All edges that end on a node, once each. */
   edgesAt(node: number): readonly NetworkEdge[];
 }
@@ -29,6 +31,8 @@ export interface NetworkNode {
   readonly index: number;
   /** In the order of the devices' ids, then of their terminals. */
   readonly terminals: readonly End[];
+  /** The busbar, block or bond it is, where it is one. */
+  readonly join: Device | undefined;
 }
 
 /** Between the nodes `a` and `b`; for a run from → to, for a source or load pos → neg, else as the kind names its ways. */
@@ -79,11 +83,11 @@ export function networkOf(design: Design, modeId: EntityId): Network {
   const points = pointsOf(devices);
 
   const drafts: Draft[] = [];
-  const joins = new Set<EntityId>();
+  const joins = new Map<EntityId, Device>();
   for (const device of devices) {
     for (const element of kindOf(device)?.network(device, conditionOf(design, modeId, device.id)) ?? []) {
       if (element.type === 'join') {
-        joins.add(device.id);
+        joins.set(device.id, device);
         const joined = element.terminals.flatMap((terminal) => points.at(device.id, terminal) ?? []);
         for (const point of joined) points.metal.join(joined[0]!, point);
         continue;
@@ -201,7 +205,7 @@ function mountOf(device: Device, points: Points): Draft | undefined {
   return { type: 'mount', device, terminal: points.ends[a]!.terminal, stud, a, b };
 }
 
-function finish(points: Points, drafts: readonly Draft[], joins: ReadonlySet<EntityId>): Network {
+function finish(points: Points, drafts: readonly Draft[], joins: ReadonlyMap<EntityId, Device>): Network {
   const nodeOfRoot = new Map<number, number>();
   const terminals: End[][] = [];
   const nodeOfPoint = points.ends.map((end, point) => {
@@ -219,8 +223,19 @@ function finish(points: Points, drafts: readonly Draft[], joins: ReadonlySet<Ent
     edgesByNode[edge.a]!.push(edge);
     if (edge.b !== edge.a) edgesByNode[edge.b]!.push(edge);
   }
+  const contacts = new Map<EntityId, ContactEdge[]>();
+  for (const edge of edges) {
+    if (edge.type !== 'contact') continue;
+    const before = contacts.get(edge.device.id);
+    if (before) before.push(edge);
+    else contacts.set(edge.device.id, [edge]);
+  }
   return {
-    nodes: terminals.map((ends, index) => ({ index, terminals: ends })),
+    nodes: terminals.map((ends, index) => ({
+      index,
+      terminals: ends,
+      join: ends.map(({ device }) => joins.get(device)).find((device) => device !== undefined),
+    })),
     edges,
     nodeAt(device, terminal) {
       const point = points.at(device, terminal);
@@ -233,6 +248,7 @@ function finish(points: Points, drafts: readonly Draft[], joins: ReadonlySet<Ent
         .map(({ name }) => name) ??
       [],
     isJoin: (device) => joins.has(device),
+    contactsOf: (device) => contacts.get(device) ?? [],
     edgesAt: (node) => edgesByNode[node] ?? [],
   };
 }

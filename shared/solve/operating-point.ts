@@ -21,6 +21,11 @@ export interface ChargingSource extends LoadBranch {
   readonly atRated: boolean;
 }
 
+interface Posed extends Task {
+  /** By charging source: whether its current has anywhere to go. */
+  readonly hasWay: readonly boolean[];
+}
+
 /** Steady: holds its voltage. Limited: gives its most. Idle: something else holds a higher voltage. */
 export type ChargingState = 'steady' | 'limited' | 'idle';
 
@@ -51,11 +56,13 @@ const HALVINGS = 30;
  * held: beyond it the voltage collapses.
  */
 export function findOperatingPoint(asked: Task): Outcome {
-  const broken = new Set(prepareCircuit(asked.nodeCount, asked.stiff, []).contradictions);
-  const task =
-    broken.size === 0
-      ? asked
-      : { ...asked, stiff: asked.stiff.map((s, i) => (broken.has(i) ? { ...s, ohm: CONTRADICTION_OHM } : s)) };
+  const alone = prepareCircuit(asked.nodeCount, asked.stiff, []);
+  const broken = new Set(alone.contradictions);
+  const stiff =
+    broken.size === 0 ? asked.stiff : asked.stiff.map((s, i) => (broken.has(i) ? { ...s, ohm: CONTRADICTION_OHM } : s));
+  // One that gives its rated current gives it into what it reaches; one that nothing closes the way round of is idle.
+  const hasWay = asked.charging.map(({ a, b, atRated }) => !atRated || alone.partOf(a) === alone.partOf(b));
+  const task = { ...asked, stiff, hasWay };
 
   const whole = solveAt(task, 1, null);
   if (whole) return { converged: broken.size === 0, heldFraction: broken.size === 0 ? 1 : 0, point: whole };
@@ -76,8 +83,10 @@ export function findOperatingPoint(asked: Task): Outcome {
  * A point at a share of the load. The states of the charging sources are found by trying: first all that are wrong
  * change at once; then only the first of them, a rule that can't go round in a circle.
  */
-function solveAt(task: Task, share: number, near: OperatingPoint | null): OperatingPoint | null {
-  const states: ChargingState[] = near ? [...near.chargingStates] : task.charging.map(() => 'steady');
+function solveAt(task: Posed, share: number, near: OperatingPoint | null): OperatingPoint | null {
+  const states: ChargingState[] = near
+    ? [...near.chargingStates]
+    : task.charging.map((_, i) => (task.hasWay[i] ? 'steady' : 'idle'));
   const stiff = task.stiff.map((branch, i) =>
     task.resistanceLoads.has(i) ? { ...branch, ohm: branch.ohm / share } : branch,
   );
@@ -86,7 +95,7 @@ function solveAt(task: Task, share: number, near: OperatingPoint | null): Operat
     const point = solveInStates(task, stiff, states, share, near);
     if (!point) return null;
     const wrong = task.charging.flatMap((source, i) => {
-      const right = rightState(source, states[i]!, point, i);
+      const right = task.hasWay[i] ? rightState(source, states[i]!, point, i) : 'idle';
       return right === states[i] ? [] : [{ i, right }];
     });
     if (wrong.length === 0) return point;

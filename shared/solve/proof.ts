@@ -9,12 +9,14 @@ import { ampacityOf, warmestC, zonesOf, type Ampacity } from './conductor.ts';
 import { considerSources, designCurrents, type ContactCurrent, type DesignCurrent, type LeftOut } from './current.ts';
 import { loadDemandOf, type LoadDemand } from './demand.ts';
 import { loadDrops, type DropMode, type LoadDrop } from './drop.ts';
+import { feederDrops, type FeederDrop } from './feeders.ts';
 import { flowOf } from './flow.ts';
-import { networkOf, type ContactEdge, type NetworkEdge, type RunEdge, type SourceEdge } from './network.ts';
+import { networkOf, type NetworkEdge, type RunEdge, type SourceEdge } from './network.ts';
 import { leastResistance, type Paths } from './paths.ts';
 import { isCrankingRun, protectionOf, type EndProtection } from './protection.ts';
 import { amountOf, ratingsOf } from './ratings.ts';
 import { regionsOf, type Regions } from './regions.ts';
+import { shortsOf, type Shorts } from './shorts.ts';
 import { minimumSizeOf, recommendedSizeOf, smallestSizeOf, type SizingCase } from './sizes.ts';
 import { solveFaults } from './solve-faults.ts';
 import { solveMode } from './solve-mode.ts';
@@ -29,8 +31,14 @@ export interface Proof {
   readonly devices: readonly Device[];
   readonly runs: readonly ProvedRun[];
   readonly runOf: ReadonlyMap<EntityId, ProvedRun>;
+  /** By protective device: the runs whose protection it is, alone or side by side with others. */
+  readonly guardedBy: ReadonlyMap<EntityId, readonly { readonly run: ProvedRun; readonly end: EndProtection }[]>;
+  /** By run: those whose unprotected way to the source begins with it. */
+  readonly runsBehind: ReadonlyMap<EntityId, readonly EntityId[]>;
+  readonly shorts: Shorts;
   readonly loads: readonly LoadDemand[];
   readonly drops: readonly LoadDrop[];
+  readonly feeders: readonly FeederDrop[];
   readonly modes: ReadonlyMap<EntityId, ModeAnalysis>;
   readonly faults: Readonly<Record<EntityId, FaultAnalysis>>;
   /** The greatest design current through a switch or protective device. */
@@ -114,7 +122,6 @@ export function proveDesign(design: Design): Proof {
   const runs = circuits.runs.map((edge) =>
     proveRun(edge, design, basis, circuits, regions, ampacities, currents, byRun, bundled, electronics),
   );
-  const contacts = contactsByDevice(circuits);
   const longByEdge = new Map(loads.filter(isLong).map((load) => [load.edge.index, load.heldA]));
   const longLoad = allOn.spread((edge) => longByEdge.get(edge.index) ?? 0);
   const runOf = new Map(runs.map((run) => [run.id, run]));
@@ -126,18 +133,22 @@ export function proveDesign(design: Design): Proof {
     devices: inService(design),
     runs,
     runOf,
+    guardedBy: guardedByDevice(runs),
+    runsBehind: runsBehind(runs),
+    shorts: shortsOf(circuits),
     loads,
     drops,
+    feeders: feederDrops(drops, circuits, basis, reckoned.demandOn),
     modes,
     faults: solveFaults(design),
     currentThrough: (device) => {
-      const through = (contacts.get(device) ?? []).map((edge) => reckoned.contactAt(edge));
+      const through = network.contactsOf(device).map((edge) => reckoned.contactAt(edge));
       return {
         lastingA: Math.max(0, ...through.map(({ lastingA }) => lastingA)),
         momentaryA: Math.max(0, ...through.map(({ momentaryA }) => momentaryA)),
       };
     },
-    longLoadThrough: (device) => Math.max(0, ...(contacts.get(device) ?? []).map((edge) => longLoad[edge.index]!)),
+    longLoadThrough: (device) => Math.max(0, ...network.contactsOf(device).map((edge) => longLoad[edge.index]!)),
   };
 }
 
@@ -216,6 +227,34 @@ function proveRun(
     smallestSize: isSignal ? null : smallestSizeOf(sizing),
     recommendedSize: isSignal ? null : recommendedSizeOf(sizing),
   };
+}
+
+function guardedByDevice(runs: readonly ProvedRun[]) {
+  const guarded = new Map<EntityId, { run: ProvedRun; end: EndProtection }[]>();
+  for (const run of runs) {
+    for (const end of run.protection) {
+      if (!end.device || end.allowedRatingA === undefined) continue;
+      for (const { id } of [end.device, ...(end.beside ?? [])]) {
+        const before = guarded.get(id);
+        if (before) before.push({ run, end });
+        else guarded.set(id, [{ run, end }]);
+      }
+    }
+  }
+  return guarded;
+}
+
+function runsBehind(runs: readonly ProvedRun[]): ReadonlyMap<EntityId, readonly EntityId[]> {
+  const behind = new Map<EntityId, EntityId[]>();
+  for (const { id, protection } of runs) {
+    for (const { ahead } of protection) {
+      if (ahead === undefined) continue;
+      const before = behind.get(ahead);
+      if (before) before.push(id);
+      else behind.set(ahead, [id]);
+    }
+  }
+  return behind;
 }
 
 interface RunDrops {
@@ -298,13 +337,4 @@ function electronicRuns(supplies: Supplies, loads: readonly LoadDemand[]): Reado
     );
   const byOthers = serves(loads.filter((load) => !electronics.includes(load)));
   return new Set([...serves(electronics)].filter((run) => !byOthers.has(run)));
-}
-
-function contactsByDevice(circuits: Circuits): ReadonlyMap<EntityId, readonly ContactEdge[]> {
-  const contacts = new Map<EntityId, ContactEdge[]>();
-  for (const edge of circuits.network.edges) {
-    if (edge.type !== 'contact') continue;
-    contacts.set(edge.device.id, [...(contacts.get(edge.device.id) ?? []), edge]);
-  }
-  return contacts;
 }

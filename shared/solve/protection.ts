@@ -6,8 +6,8 @@ import { DISTANCES, NEXT_STANDARD_CEILING, nextRatingUp } from '#shared/tables/p
 import type { Circuits } from './circuits.ts';
 import type { Ampacity } from './conductor.ts';
 import type { RunEdge } from './network.ts';
-import { amountOf, ratingsOf } from './ratings.ts';
-import { coveringOf, worstCovering, type Covering, type Regions, type Side, type Way } from './regions.ts';
+import { ratingsOf } from './ratings.ts';
+import { coveringOf, worstCovering, type Covering, type Guard, type Regions, type Side, type Way } from './regions.ts';
 
 /** What protects one end of a run, or that nothing does. */
 export interface EndProtection {
@@ -15,6 +15,7 @@ export interface EndProtection {
   /** `near`: the device stands a way down the run itself, as the one at a battery does. */
   readonly how: 'upstream' | 'near' | 'none';
   readonly device?: Device;
+  readonly beside?: readonly Device[];
   readonly ratedA?: number;
   readonly allowedRatingA?: number;
   /** Of the stub that no device protects: from the source of its current to the first device. */
@@ -50,12 +51,12 @@ export function protectionOf(
 ): EndProtection[] {
   const side = circuits.netOf(edge.a).side;
   const isUngrounded = side === 'fed' || (side === 'return' && basis.dcSystem === 'ungrounded');
-  if (!isUngrounded || circuits.isSignal(edge.run) || isCrankingRun(edge.run.id, regions)) return [];
+  if (!isUngrounded || isCrankingRun(edge.run.id, regions)) return [];
   const sides = regions.sidesOf(edge.run.id);
   if (!sides) return [];
   return (['from', 'to'] as const).flatMap((fromEnd) => {
     const [here, there] = fromEnd === 'from' ? [sides.from, sides.to] : [sides.to, sides.from];
-    return endProtection(edge, fromEnd, here, there, ampacity, basis) ?? [];
+    return endProtection(edge, fromEnd, here, there, circuits, ampacity, basis) ?? [];
   });
 }
 
@@ -72,14 +73,15 @@ function endProtection(
   fromEnd: 'from' | 'to',
   here: Side,
   there: Side,
+  circuits: Circuits,
   ampacity: Ampacity,
   basis: FullBasis,
 ): EndProtection | undefined {
   const { source, feeding } = here;
   if (source) {
-    const isInsideBank =
+    const leadsIntoBank =
       !there.nearest && source.bank !== undefined && [there.source?.bank, there.stacked].includes(source.bank);
-    if (isInsideBank) return undefined;
+    if (leadsIntoBank || isJumper(edge, circuits)) return undefined;
     if (!there.nearest) return { fromEnd, how: 'none', source: source.device, ahead: source.way?.run.id };
     return {
       fromEnd,
@@ -95,21 +97,34 @@ function endProtection(
   // A smaller conductor tapped from a larger one: its own device stands for it, if it is near enough.
   const byOwn = ratingOf(there.largest, edge, ampacity, basis);
   if (!isAllowed(byOwn)) return { fromEnd, how: 'upstream', ...byUpstream };
-  return { fromEnd, how: 'near', source: feeding, stub: stubOf(edge, here, there, basis), ...byOwn };
+  return { fromEnd, how: 'near', source: feeding.device, stub: stubOf(edge, here, there, basis), ...byOwn };
+}
+
+/** From a terminal of one battery straight to one of another in its bank, whatever else hangs there. */
+function isJumper(edge: RunEdge, circuits: Circuits): boolean {
+  const [one, other] = [edge.a, edge.b].map((node) =>
+    circuits.network
+      .edgesAt(node)
+      .flatMap((each) => (each.type === 'source' ? (circuits.bankOf(each.device.id) ?? []) : [])),
+  );
+  return one!.some((bank) => other!.includes(bank));
 }
 
 interface Rating {
   readonly device?: Device;
+  /** That feed the same conductors side by side with it: all of them have to open. */
+  readonly beside?: readonly Device[];
   readonly ratedA?: number;
   readonly allowedRatingA?: number;
 }
 
-function ratingOf(device: Device | undefined, edge: RunEdge, ampacity: Ampacity, basis: FullBasis): Rating {
-  if (!device) return {};
-  const ratings = ratingsOf(device);
+function ratingOf(guard: Guard | undefined, edge: RunEdge, ampacity: Ampacity, basis: FullBasis): Rating {
+  if (!guard) return {};
+  const { device, beside, ratedA } = guard;
   return {
     device,
-    ratedA: amountOf(ratings, 'ratedA'),
+    ...(beside.length > 0 && { beside }),
+    ratedA,
     allowedRatingA: allowedRatingA(edge, ampacity, familyOf(device), basis),
   };
 }

@@ -16,12 +16,20 @@ export interface Side {
   /** The nearest protective device, whichever way it feeds. */
   readonly nearest?: Reach;
   /** The first devices of greatest rating: all of them, and those that feed this region. */
-  readonly largest?: Device;
-  readonly feeding?: Device;
+  readonly largest?: Guard;
+  readonly feeding?: Guard;
   /** A battery that stands on another with its negative here: the link between them is inside their bank. */
   readonly stacked?: Bank;
   readonly hasBattery: boolean;
   readonly hasStarter: boolean;
+}
+
+/** What has to open before a fault is cut off: a protective device, and those that stand side by side with it. */
+export interface Guard {
+  readonly device: Device;
+  readonly beside: readonly Device[];
+  /** Of all of them together; undefined where one does not say. */
+  readonly ratedA: number | undefined;
 }
 
 /** A way along the conductors. */
@@ -68,6 +76,7 @@ export function regionsOf(circuits: Circuits, basis: FullBasis): Regions {
   for (const gate of gates) {
     for (const node of [gate.a, gate.b]) gatesAt.set(node, [...(gatesAt.get(node) ?? []), gate]);
   }
+  const guards = guardsOf(gates, regions);
   const sourcesAt = (node: number) => unprotectedSourcesAt(circuits, basis, node);
   const feeds = feedingGates(network.nodes.length, regions, gates, sourcesAt);
 
@@ -82,8 +91,9 @@ export function regionsOf(circuits: Circuits, basis: FullBasis): Regions {
         covering: 'enclosed',
         way: undefined,
       };
-      const feeding = feeds.has(feedKey(gate, regions.rootOf(node))) ? gate.device : undefined;
-      side = merge(side, { nearest: reach, largest: gate.device, feeding, hasBattery: false, hasStarter: false });
+      const guard = guards.get(gate.index)!;
+      const feeding = feeds.has(feedKey(gate, regions.rootOf(node))) ? guard : undefined;
+      side = merge(side, { nearest: reach, largest: guard, feeding, hasBattery: false, hasStarter: false });
     }
     for (const edge of network.edgesAt(node)) {
       if (edge.type === 'source' && edge.b === node && circuits.netOf(node).side === 'fed') {
@@ -116,7 +126,7 @@ export function regionsOf(circuits: Circuits, basis: FullBasis): Regions {
       let gate = gates.find((each) => each.device.id === deviceId);
       while (gate) {
         const before: Device | undefined = [gate.a, gate.b]
-          .map((node) => messages.whole(node).feeding)
+          .map((node) => messages.whole(node).feeding?.device)
           .find((device) => device && !seen.has(device.id));
         if (!before) break;
         seen.add(before.id);
@@ -138,6 +148,26 @@ function isGate(edge: NetworkEdge): edge is ContactEdge {
 
 function lengthOf(edge: NetworkEdge): number {
   return edge.type === 'run' ? (edge.run.lengthM ?? 0) : 0;
+}
+
+/** Devices that join the same two regions share the current, and only together open the way: their ratings add. */
+function guardsOf(gates: readonly ContactEdge[], regions: Union): ReadonlyMap<number, Guard> {
+  const together = new Map<string, ContactEdge[]>();
+  for (const gate of gates) {
+    const ends = [regions.rootOf(gate.a), regions.rootOf(gate.b)].toSorted((a, b) => a - b).join(' ');
+    together.set(ends, [...(together.get(ends) ?? []), gate]);
+  }
+  const guards = new Map<number, Guard>();
+  for (const group of together.values()) {
+    const devices = [...new Set(group.map(({ device }) => device))];
+    const ratings = devices.map((device) => amountOf(ratingsOf(device), 'ratedA'));
+    const ratedA = ratings.reduce((sum, each) => (sum === undefined || each === undefined ? undefined : sum + each), 0);
+    for (const gate of group) {
+      const beside = devices.filter((device) => device !== gate.device);
+      guards.set(gate.index, { device: gate.device, beside, ratedA });
+    }
+  }
+  return guards;
 }
 
 /** Batteries, and charging sources that say they are not self-limiting. */
@@ -278,9 +308,21 @@ function passMessages(circuits: Circuits, isBranch: ReadonlySet<number>, ownSide
 }
 
 function extend(side: Side, edge: NetworkEdge): Side {
+  if (edge.type === 'contact' && !carriesCranking(edge)) return { ...side, hasBattery: false, hasStarter: false };
   if (edge.type !== 'run') return side;
   return { ...side, source: along(side.source, edge.run), nearest: along(side.nearest, edge.run) };
 }
+
+/** The way to a starter leads over selectors and battery switches; one that does not say what it is for may be one. */
+function carriesCranking({ device }: ContactEdge): boolean {
+  if (device.kind !== 'switch') return true;
+  const { role } = device.ratings;
+  if (role !== undefined) return role === 'battery' || role === 'emergencyParallel';
+  return (amountOf(ratingsOf(device), 'continuousA') ?? 0) >= BATTERY_SWITCH_FROM_A;
+}
+
+/** No switch for a battery is made for less. */
+const BATTERY_SWITCH_FROM_A = 100;
 
 function along(reach: Reach | undefined, run: Run): Reach | undefined {
   if (!reach) return undefined;
@@ -325,9 +367,9 @@ function nearer(a: Reach | undefined, b: Reach | undefined): Reach | undefined {
   return a.device.id <= b.device.id ? a : b;
 }
 
-function greater(a: Device | undefined, b: Device | undefined): Device | undefined {
+function greater(a: Guard | undefined, b: Guard | undefined): Guard | undefined {
   if (!a || !b) return a ?? b;
-  const [ofA, ofB] = [a, b].map((device) => amountOf(ratingsOf(device), 'ratedA') ?? Infinity);
-  if (ofA !== ofB) return ofA! > ofB! ? a : b;
-  return a.id <= b.id ? a : b;
+  const [ofA, ofB] = [a.ratedA ?? Infinity, b.ratedA ?? Infinity];
+  if (ofA !== ofB) return ofA > ofB ? a : b;
+  return a.device.id <= b.device.id ? a : b;
 }

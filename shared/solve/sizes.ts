@@ -32,6 +32,11 @@ export function recommendedSizeOf(sizing: SizingCase): Size | null {
   return series.slice(from).find((size) => carries(size, sizing) && letsProtectionStand(size, sizing)) ?? null;
 }
 
+/** The same without its drop, for a run whose drop it takes another run to mend. */
+export function smallestByAmpacity(sizing: SizingCase): Size | null {
+  return recommendedSizeOf({ ...sizing, dropShare: Infinity });
+}
+
 function carries(size: Size, sizing: SizingCase): boolean {
   const { run, basis, warmestC, designCurrentA, dropShare } = sizing;
   if (ampacityAt(size, sizing).allowedA < designCurrentA * (1 - 1e-9)) return false;

@@ -10,12 +10,14 @@ import { prepareCircuit, solveCircuit, type Circuit, type StiffBranch } from './
 import { runOhmAt } from './conductor.ts';
 import { factorise, probe, type Factor } from './laplacian.ts';
 import { networkOf, walkFrom, type ContactEdge, type Network, type NetworkEdge } from './network.ts';
+import { amountOf, ratingsOf } from './ratings.ts';
 
 /**
  * What every fuse and breaker must break, and what must still open it. Greatest: copper at 20 °C, batteries full
  * and of least resistance, a bolted short just on either side of the device. Least: copper as hot as its insulation
  * allows, batteries old and nearly empty, the short at the far end of what the device protects. Every switch and
- * selector is closed, as it may be at the worst moment; charging sources limit themselves and are not counted.
+ * selector is closed, as it may be at the worst moment. In the greatest fault a protective device counts with the
+ * resistance somebody entered or with none: a guess may not stand between a battery and what has to break its current.
  */
 export function solveFaults(design: Design): Record<EntityId, FaultAnalysis> {
   const network = networkOf(design, 'all-on');
@@ -92,7 +94,10 @@ function branchOf(edge: NetworkEdge, batteryCase: BatteryCase): { ohm: number; e
   }
   if (edge.type === 'contact') {
     if (!edge.element.closable) return undefined;
-    return { ohm: Math.max(edge.element.ohm, isProtective(edge) ? LEAST_DEVICE_OHM : 0), emfV: 0 };
+    const { element, device } = edge;
+    if (!element.protective) return { ohm: element.ohm, emfV: 0 };
+    const isGuessed = batteryCase === 'greatest' && !isOhmTold(device);
+    return { ohm: Math.max(isGuessed ? 0 : element.ohm, LEAST_DEVICE_OHM), emfV: 0 };
   }
   if (edge.type !== 'source' || edge.element.type !== 'battery') return undefined;
   const { ohm, emfV } = batteryBehind(edge.element, batteryCase);
@@ -110,6 +115,10 @@ function coldOhm(run: Run): number | null {
 
 function isProtective(edge: NetworkEdge): edge is ContactEdge {
   return edge.type === 'contact' && edge.element.protective;
+}
+
+function isOhmTold(device: Device): boolean {
+  return amountOf(ratingsOf(device), 'coldMilliohm') !== undefined;
 }
 
 interface Short {
@@ -214,7 +223,7 @@ function basesOf(network: Network, stage: Stage | null): ReadonlyMap<number, str
     names.push(nameOf(edge.device, edge.element));
   }
   const say = (names: readonly string[]) =>
-    `Batteries full (${names.join('; ')}), copper at 20 °C, every switch closed.`;
+    `Batteries full (${names.join('; ')}), copper at 20 °C, every switch closed; charging sources, which limit themselves, are not counted.`;
   return new Map([...batteries].map(([part, names]) => [part, say(names)]));
 }
 

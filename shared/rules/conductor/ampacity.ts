@@ -2,6 +2,7 @@ import type { Remedy } from '#shared/model/analysis.ts';
 import { defineRule } from '#shared/rules/rule.ts';
 import { mayChange, useSize } from '#shared/rules/mending.ts';
 import { ampacityWith } from '#shared/solve/conductor.ts';
+import { smallestByAmpacity } from '#shared/solve/sizes.ts';
 import { conductorOf } from '#shared/model/defaults.ts';
 import type { Proof, ProvedRun } from '#shared/solve/proof.ts';
 import { callOf } from '#shared/solve/ratings.ts';
@@ -13,7 +14,8 @@ import { callOf } from '#shared/solve/ratings.ts';
  * Why: a conductor loaded beyond its ampacity passes the temperature of its insulation, which softens and fails.
  * The current held against it is the worst of the modes, with the demand of the loads it serves.
  * Source: 33 CFR 183.425 Table 5 and ABYC E-11; ISO 13297 Table A.1 (from memory).
- * Says nothing about cranking current, from which the path of a starter is exempt, nor about signal runs.
+ * Says nothing about cranking current, from which the path of a starter is exempt, about signal runs, nor about what a
+ * short circuit drives: `topology/direct-short` does.
  */
 export const ampacity = defineRule({
   id: 'conductor/ampacity',
@@ -44,14 +46,14 @@ export const ampacity = defineRule({
         yield { subject: { run: run.id }, mode, figures, message, remedies: betterInsulation(run) };
         continue;
       }
-      if (run.designCurrentA <= allowedA * (1 + 1e-9)) continue;
+      if (run.designCurrentA <= allowedA * (1 + 1e-9) || proof.shorts.isShorted(run.edge.a)) continue;
       yield { subject: { run: run.id }, mode, figures, remedies: thickerConductor(proof, run) };
     }
   },
 });
 
 function thickerConductor(proof: Proof, run: ProvedRun): Remedy[] {
-  const size = run.recommendedSize;
+  const size = run.recommendedSize ?? smallestByAmpacity(run.sizing);
   return size !== null && mayChange(run.run) ? [useSize(proof, run, size)] : [];
 }
 

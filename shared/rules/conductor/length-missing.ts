@@ -23,7 +23,14 @@ export const lengthMissing = defineRule({
   *check(proof) {
     for (const { id, run } of proof.runs) {
       if (run.lengthM !== undefined) continue;
-      yield { subject: { run: id }, figures: { run: callOf(run) } };
+      yield {
+        subject: { run: id },
+        message:
+          run.milliohm === undefined
+            ? undefined
+            : '{run} has no length, so the distances over it are not proved and it is not in the cut list.',
+        figures: { run: callOf(run) },
+      };
     }
   },
 });

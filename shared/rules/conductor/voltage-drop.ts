@@ -1,10 +1,11 @@
 import type { Remedy } from '#shared/model/analysis.ts';
 import { conductorOf, workOf } from '#shared/model/defaults.ts';
 import { seriesOf, type Size } from '#shared/model/size.ts';
-import { defineRule } from '#shared/rules/rule.ts';
+import { defineRule, type Spoken } from '#shared/rules/rule.ts';
 import { listOf, mayChange, sizePatches } from '#shared/rules/mending.ts';
 import { workingOhmPerMetre } from '#shared/solve/conductor.ts';
 import type { LoadDrop } from '#shared/solve/drop.ts';
+import type { FeederDrop } from '#shared/solve/feeders.ts';
 import type { Proof, ProvedRun } from '#shared/solve/proof.ts';
 import { callOf } from '#shared/solve/ratings.ts';
 
@@ -14,7 +15,8 @@ import { callOf } from '#shared/solve/ratings.ts';
  *
  * Why: navigation lights dim, pumps slow and radios drop out long before a wire is warm. The conductors alone are
  * held against the limit; with fuses and contacts the same figure is a thing that should be mended. Other loads'
- * momentary currents are left out, and told in a note. A starter's path may lose 10 %.
+ * momentary currents are left out, and told in a note. A starter's path may lose 10 %. The feeder of a panel, a
+ * busbar from which two or more protected branches lead, is held on its own to the limit of critical loads.
  * Source: ABYC E-11 11.14.2.6; ISO 10133:2012 4.8 note and, from memory, ISO 13297.
  * Says nothing where the length of a run on the path is not known: `conductor/length-missing` does.
  */
@@ -30,6 +32,7 @@ export const voltageDrop = defineRule({
     '{load} loses {lostV} of its {nominalV} on the way there and back, {fraction}; {limit} is the limit. {worstRun} has the greatest part, {worstRunV}.',
 
   *check(proof) {
+    yield* ofFeeders(proof);
     for (const drop of proof.drops) {
       if (!drop.isKnown || !(drop.load.nominalV > 0) || drop.path.length === 0) continue;
       const limitV = drop.limit * drop.load.nominalV;
@@ -56,11 +59,38 @@ export const voltageDrop = defineRule({
         severity: verdict.severity,
         message: verdict.message,
         figures,
-        remedies: verdict.severity === 'note' ? [] : thickerPath(proof, drop, limitV, verdict.lostV - drop.volts),
+        remedies: remediesFor(proof, drop, limitV, verdict),
       };
     }
   },
 });
+
+/** The feeder of a panel on its own; a panel behind one that already is wrong has the same cause. */
+function* ofFeeders(proof: Proof): Iterable<Spoken> {
+  const isWrong = ({ isKnown, volts, limit, nominalV }: FeederDrop) => isKnown && volts > limit * nominalV * (1 + 1e-9);
+  const wrong = new Set(proof.feeders.filter(isWrong).map(({ panel }) => panel));
+  for (const feeder of proof.feeders) {
+    const { panel, nominalV, volts, limit, path, voltsOf, ahead } = feeder;
+    if (!isWrong(feeder) || ahead.some((device) => wrong.has(device))) continue;
+    const worst = voltsOf.indexOf(Math.max(...voltsOf));
+    yield {
+      subject: { device: panel.id },
+      mode: 'all-on',
+      message:
+        'The feeder of {panel} loses {lostV} of {nominalV} there and back with all that its branches ask for, {fraction}; {limit} is the limit. {worstRun} has the greatest part, {worstRunV}.',
+      figures: {
+        panel: callOf(panel),
+        nominalV,
+        lostV: volts,
+        fraction: volts / nominalV,
+        limit,
+        worstRun: callOf(path[worst]!),
+        worstRunV: voltsOf[worst]!,
+      },
+      remedies: thickerPath(proof, { volts, path, voltsOf, nominalV }, limit * nominalV, 0),
+    };
+  }
+}
 
 interface Verdict {
   readonly severity: 'must' | 'should' | 'note';
@@ -85,11 +115,26 @@ function verdictOn(drop: LoadDrop, limitV: number): Verdict | undefined {
   return { severity: 'note', lostV: drop.withMomentaryV, message };
 }
 
+/** With fuses and contacts within the limit too, so that nothing is left to say; if that can't be, the conductors alone. */
+function remediesFor(proof: Proof, drop: LoadDrop, limitV: number, { severity, lostV }: Verdict): Remedy[] {
+  if (severity === 'note') return [];
+  const lost = { ...drop, nominalV: drop.load.nominalV };
+  const whole = thickerPath(proof, lost, limitV, drop.totalV - drop.volts);
+  return whole.length > 0 || lostV !== drop.volts ? whole : thickerPath(proof, lost, limitV, 0);
+}
+
+interface Lost {
+  readonly volts: number;
+  readonly nominalV: number;
+  readonly path: LoadDrop['path'];
+  readonly voltsOf: readonly number[];
+}
+
 /**
  * The thinnest step at a time on the run that loses most, new work first, until the load has its voltage. `besideV`
  * is what is lost that no conductor can mend. Less drop lets a heater take more, which is allowed for.
  */
-function thickerPath(proof: Proof, drop: LoadDrop, limitV: number, besideV: number): Remedy[] {
+function thickerPath(proof: Proof, drop: Lost, limitV: number, besideV: number): Remedy[] {
   const steps = drop.path.flatMap((run, i) => {
     const proved = proof.runOf.get(run.id);
     const canChange = proved && mayChange(run) && run.lengthM !== undefined && run.milliohm === undefined;
@@ -97,7 +142,7 @@ function thickerPath(proof: Proof, drop: LoadDrop, limitV: number, besideV: numb
   });
   const fixedV = drop.volts - steps.reduce((sum, step) => sum + step.volts, 0) + besideV;
   const startV = drop.volts + besideV;
-  const needed = (lostV: number) => lostV * (1 + (startV - lostV) / drop.load.nominalV) > limitV;
+  const needed = (lostV: number) => lostV * (1 + (startV - lostV) / drop.nominalV) > limitV;
   for (const isOpen of [(step: (typeof steps)[number]) => workOf(step.proved.run) === 'new', () => true]) {
     const sizes = steps.map((step) => ({ ...step }));
     const lostV = () => fixedV + sizes.reduce((sum, step) => sum + step.volts, 0);

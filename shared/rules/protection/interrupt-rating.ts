@@ -3,6 +3,7 @@ import type { Device } from '#shared/model/design.ts';
 import { guardedBy, mayChange } from '#shared/rules/mending.ts';
 import { leastRatingA } from '#shared/rules/protection-load.ts';
 import { defineRule } from '#shared/rules/rule.ts';
+import { highestVoltageAt } from '#shared/solve/highest-voltage.ts';
 import { interruptNeedOf, type InterruptNeed } from '#shared/solve/interrupting.ts';
 import type { Proof } from '#shared/solve/proof.ts';
 import { amountOf, callOf, isProtective, ratingsOf } from '#shared/solve/ratings.ts';
@@ -15,7 +16,8 @@ import { formatA } from '#shared/units/current.ts';
  * Why: one that can't welds shut or bursts, and the wire behind it burns. Asked is the greater of the currents through
  * it for a bolted short on either side, never the sum at its node. It passes as well where it meets the table for the
  * bank's cold-cranking amperes, or above that the figure of the battery's maker; that table met but the computed
- * current above the rating should be mended. A device may rely on one ahead of it that is named.
+ * current above the rating should be mended. A device may rely on one ahead of it that is named. Above the voltage it is
+ * made for it has no such rating at all.
  * Source: ABYC E-11 Table V-A and the text on banks above 2,200 CCA or 500 Ah.
  * Says nothing where the rating is not told: `record/rating-unknown` does.
  */
@@ -34,7 +36,20 @@ export const interruptRating = defineRule({
       const interruptA = amountOf(ratingsOf(device), 'interruptA');
       if (!isProtective(device) || interruptA === undefined) continue;
       const need = interruptNeedOf(proof, device);
-      if (!need || interruptA >= need.computedA * (1 - 1e-9) || isBackedUp(proof, device, need)) continue;
+      if (!need) continue;
+      const maxV = amountOf(ratingsOf(device), 'maxV');
+      const highestV = highestVoltageAt(proof, device);
+      if (maxV !== undefined && maxV < highestV * (1 - 1e-9) && need.computedA > 0) {
+        yield {
+          subject: { device: device.id },
+          message:
+            '{device} can break {interruptA} at {maxV} and below; its circuit can stand at {highestV}, and a short circuit sends {computedA} through it.',
+          figures: { device: callOf(device), interruptA, maxV, highestV, computedA: need.computedA, basis: need.basis },
+          remedies: highestV <= STRONG_FUSE.maxV ? strongerFuse(proof, device, need) : [],
+        };
+        continue;
+      }
+      if (interruptA >= need.computedA * (1 - 1e-9) || isBackedUp(proof, device, need)) continue;
       const { admittedA } = need;
       const figures = {
         device: callOf(device),

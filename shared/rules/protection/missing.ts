@@ -31,7 +31,7 @@ export const missing = defineRule({
   *check(proof) {
     for (const run of proof.runs) {
       for (const end of run.protection) {
-        if (end.how !== 'none' || isFoundAhead(proof, end.ahead)) continue;
+        if (end.how !== 'none' || isFoundAhead(proof, end.ahead) || proof.shorts.isFedByShort(run.edge)) continue;
         yield {
           subject: { run: run.id },
           figures: {
@@ -89,7 +89,7 @@ function fuseAtSource(proof: Proof, run: ProvedRun, fromEnd: 'from' | 'to'): Rem
 function fuseRating(proof: Proof, run: ProvedRun): number | undefined {
   const behind = new Set([run.id]);
   for (const id of behind) {
-    for (const each of proof.runs) if (each.protection.some((end) => end.ahead === id)) behind.add(each.id);
+    for (const each of proof.runsBehind.get(id) ?? []) behind.add(each);
   }
   const mostA = Math.min(
     ...[...behind].map((id) => {
@@ -98,7 +98,10 @@ function fuseRating(proof: Proof, run: ProvedRun): number | undefined {
     }),
   );
   const neededA = run.designCurrentA * CONTINUOUS_LOAD_FACTOR;
-  return standardRatings(FUSE.family).find((ratedA) => ratedA >= neededA && ratedA <= mostA * (1 + 1e-9));
+  const isAllowed = (ratedA: number) => ratedA <= mostA * (1 + 1e-9);
+  // What no mode sends current through is for what nobody has reckoned with: then the wire sets the rating.
+  if (neededA === 0) return standardRatings(FUSE.family).findLast(isAllowed);
+  return standardRatings(FUSE.family).find((ratedA) => ratedA >= neededA && isAllowed(ratedA));
 }
 
 function freeId(proof: Proof, wanted: string): string {

@@ -1,7 +1,8 @@
 import type { Remedy } from '#shared/model/analysis.ts';
 import { workOf } from '#shared/model/defaults.ts';
 import type { Device } from '#shared/model/design.ts';
-import { mayChange, useRating, useSize } from '#shared/rules/mending.ts';
+import { compareMarks } from '#shared/rules/marks.ts';
+import { listOf, mayChange, useRating, useSize } from '#shared/rules/mending.ts';
 import { defineRule } from '#shared/rules/rule.ts';
 import { leastRatingA } from '#shared/rules/protection-load.ts';
 import type { Proof, ProvedRun } from '#shared/solve/proof.ts';
@@ -32,19 +33,23 @@ export const ratingAboveAmpacity = defineRule({
 
   *check(proof) {
     for (const run of proof.runs) {
-      for (const { device, ratedA, allowedRatingA } of run.protection) {
+      for (const { device, beside = [], ratedA, allowedRatingA } of run.protection) {
         if (!device || ratedA === undefined || allowedRatingA === undefined || run.ampacity.allowedA <= 0) continue;
         if (ratedA <= allowedRatingA * (1 + 1e-9)) continue;
         yield {
           subject: { run: run.id },
           figures: {
-            device: callOf(device),
+            device: listOf([device, ...beside].toSorted(compareMarks).map(callOf)),
             ratedA,
             run: callOf(run.run),
             allowedA: run.ampacity.allowedA,
             allowedRatingA,
           },
-          remedies: remediesFor(proof, run, device, allowedRatingA),
+          message:
+            beside.length === 0
+              ? undefined
+              : '{device} side by side pass {ratedA} before they open; {run} carries {allowedA}, so no more than {allowedRatingA} may stand ahead of it.',
+          remedies: remediesFor(proof, run, device, beside.length > 0, allowedRatingA),
         };
       }
     }
@@ -52,10 +57,16 @@ export const ratingAboveAmpacity = defineRule({
 });
 
 /** What is new is changed before what exists. */
-function remediesFor(proof: Proof, run: ProvedRun, device: Device, allowedRatingA: number): Remedy[] {
+function remediesFor(
+  proof: Proof,
+  run: ProvedRun,
+  device: Device,
+  isOneOfMany: boolean,
+  allowedRatingA: number,
+): Remedy[] {
   const ways: { readonly isNew: boolean; readonly remedy: Remedy }[] = [];
   const fittingA = nextRatingDown(familyOf(device), allowedRatingA);
-  if (fittingA !== undefined && fittingA >= leastRatingA(proof, device.id) && mayChange(device)) {
+  if (!isOneOfMany && fittingA !== undefined && fittingA >= leastRatingA(proof, device.id) && mayChange(device)) {
     ways.push({ isNew: workOf(device) === 'new', remedy: useRating(device, fittingA) });
   }
   if (run.recommendedSize !== null && mayChange(run.run)) {

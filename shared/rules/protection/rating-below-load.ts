@@ -30,7 +30,7 @@ export const ratingBelowLoad = defineRule({
   *check(proof) {
     for (const device of proof.devices) {
       const ratedA = amountOf(ratingsOf(device), 'ratedA');
-      if (!isProtective(device) || ratedA === undefined) continue;
+      if (!isProtective(device) || ratedA === undefined || isShorted(proof, device)) continue;
       const { lastingA, momentaryA } = proof.currentThrough(device.id);
       const neededA = leastRatingA(proof, device.id);
       const figures = { device: callOf(device), ratedA, currentA: lastingA, neededA, peakA: lastingA + momentaryA };
@@ -50,6 +50,10 @@ export const ratingBelowLoad = defineRule({
     }
   },
 });
+
+function isShorted({ circuits, shorts }: Proof, device: Device): boolean {
+  return circuits.network.contactsOf(device.id).some(({ a }) => shorts.isShorted(a));
+}
 
 /** The next rating of its family, where every wire it protects allows it. */
 function nextLarger(proof: Proof, device: Device, neededA: number): Remedy[] {

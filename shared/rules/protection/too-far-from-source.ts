@@ -1,3 +1,4 @@
+import type { Device } from '#shared/model/design.ts';
 import type { Remedy } from '#shared/model/analysis.ts';
 import { mayChange, listOf } from '#shared/rules/mending.ts';
 import { defineRule } from '#shared/rules/rule.ts';
@@ -28,7 +29,7 @@ export const tooFarFromSource = defineRule({
   *check(proof) {
     for (const run of proof.runs) {
       for (const { stub, source } of run.protection) {
-        if (!stub || stub.verdict === 'right' || isFoundEarlier(proof, run, stub)) continue;
+        if (!stub || stub.verdict === 'right' || isFoundEarlier(proof, run, stub, source)) continue;
         const isUntold = stub.verdict === 'not told';
         const isShortEnough = stub.lengthM <= stub.enclosedLimitM + 1e-9;
         yield {
@@ -54,11 +55,15 @@ export const tooFarFromSource = defineRule({
   },
 });
 
-/** The stub to one device is one cause: it is said of its first run. */
-function isFoundEarlier(proof: Proof, run: ProvedRun, stub: Stub): boolean {
+/** A stub that is too long already at its beginning is one cause, whatever hangs on its end: it is said of its first run. */
+function isFoundEarlier(proof: Proof, run: ProvedRun, stub: Stub, source: Device | undefined): boolean {
   const nearer = stub.runs.slice(0, Math.max(0, stub.runs.indexOf(run.id)));
   return nearer.some((id) =>
-    proof.runOf.get(id)?.protection.some((end) => end.stub?.device === stub.device && end.stub.verdict !== 'right'),
+    proof.runOf.get(id)?.protection.some((end) => {
+      if (!end.stub || end.stub.verdict === 'right') return false;
+      const isSame = end.stub.device === stub.device || end.source === source;
+      return isSame && (end.stub.verdict === 'too far' || stub.verdict === 'not told');
+    }),
   );
 }
 

@@ -10,7 +10,8 @@ import { formatV } from '#shared/units/voltage.ts';
 import { listOf } from '#shared/rules/mending.ts';
 
 /**
- * The ratings that safety hangs on are told: what a fuse or breaker can interrupt, and at what voltage.
+ * The ratings that safety hangs on are told: what a fuse or breaker can interrupt, and at what voltage; and those that
+ * nothing can be worked out without make sense.
  *
  * Why: what is not known is not passed. New work has its data sheet, so there it must be told; on what already is
  * aboard it should be found out. The finding says the value the rating would have to have.
@@ -44,6 +45,32 @@ export const ratingUnknown = defineRule({
   },
 });
 
+/** What no figure of a device can be worked out without. A load says its amperes or its watts. */
+function neededRatings({ kind, ratings }: Device): readonly (readonly [name: string, what: string])[] {
+  if (kind !== 'load') return NEEDED[kind] ?? [];
+  return [
+    ['nominalV', 'its voltage'],
+    ratings.ratedA === undefined && ratings.ratedW !== undefined
+      ? ['ratedW', 'what power it takes']
+      : ['ratedA', 'what current it takes'],
+  ];
+}
+
+const NEEDED: Readonly<Record<string, readonly (readonly [name: string, what: string])[]>> = {
+  battery: [
+    ['nominalV', 'its voltage'],
+    ['capacityAh', 'its capacity'],
+  ],
+  alternator: [
+    ['maxA', 'the most it gives'],
+    ['regulatedV', 'the voltage it holds'],
+  ],
+  fuse: [['ratedA', 'its rating']],
+  breaker: [['ratedA', 'its rating']],
+  switch: [['continuousA', 'what it carries']],
+  selector: [['continuousA', 'what it carries']],
+};
+
 interface Unknown {
   readonly name: string;
   readonly value: number;
@@ -51,14 +78,17 @@ interface Unknown {
 }
 
 function unknownRatings(proof: Proof, device: Device): Unknown[] {
-  if (!isProtective(device)) return [];
   const ratings = ratingsOf(device);
-  const unknown: Unknown[] = [];
-  if (amountOf(ratings, 'interruptA') === undefined) {
+  const isTold = (name: string) => (amountOf(ratings, name) ?? 0) > 0;
+  const unknown: Unknown[] = neededRatings(device)
+    .filter(([name]) => !isTold(name))
+    .map(([name, what]) => ({ name, value: 0, says: `${what} (more than 0)` }));
+  if (!isProtective(device)) return unknown;
+  if (!isTold('interruptA')) {
     const value = interruptNeedOf(proof, device)?.computedA ?? 0;
     unknown.push({ name: 'interruptA', value, says: `what it can interrupt (it has to be ${formatA(value)} or more)` });
   }
-  if (amountOf(ratings, 'maxV') === undefined) {
+  if (!isTold('maxV')) {
     const value = highestVoltageAt(proof, device);
     unknown.push({ name: 'maxV', value, says: `up to what voltage (it has to be ${formatV(value)} or more)` });
   }

@@ -27,7 +27,8 @@ export const deviceUnsupplied = defineRule({
     const open = new Set(openTerminals(proof).map(({ device }) => device.id));
     const byCause = new Map<string, LoadDemand[]>();
     for (const load of proof.loads) {
-      if (isSupplied(proof, load) || open.has(load.device.id)) continue;
+      const isAcrossShort = [load.edge.a, load.edge.b].some((node) => proof.shorts.isShorted(node));
+      if (isSupplied(proof, load) || open.has(load.device.id) || isAcrossShort) continue;
       const cause = causeOf(proof, load);
       byCause.set(cause, [...(byCause.get(cause) ?? []), load]);
     }

@@ -3,7 +3,7 @@ import type { Remedy } from '#shared/model/analysis.ts';
 import { defineRule } from '#shared/rules/rule.ts';
 import type { Proof } from '#shared/solve/proof.ts';
 import { callOf } from '#shared/solve/ratings.ts';
-import { directShortsOf, type DirectShort } from '#shared/solve/shorts.ts';
+import type { DirectShort } from '#shared/solve/shorts.ts';
 
 /**
  * No way of wires, fuses and switches leads from the positive of a battery to its negative without a load on it.
@@ -24,7 +24,7 @@ export const directShort = defineRule({
   message: 'From the positive of {source} the way {runs} leads to a negative with no load on it.',
 
   *check(proof) {
-    for (const short of directShortsOf(proof.circuits)) {
+    for (const short of proof.shorts.all) {
       yield {
         subject: { device: short.source.id },
         message: short.closing

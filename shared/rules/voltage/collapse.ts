@@ -1,5 +1,4 @@
 import { defineRule } from '#shared/rules/rule.ts';
-import { directShortsOf } from '#shared/solve/shorts.ts';
 
 /**
  * The sources can hold the load: in every mode the network has an operating point.
@@ -21,7 +20,7 @@ export const collapse = defineRule({
     'In the mode {mode} the sources and their wires hold no more than {heldFraction} of the load; the voltage collapses.',
 
   *check(proof) {
-    if (directShortsOf(proof.circuits).length > 0) return;
+    if (proof.shorts.all.length > 0) return;
     const failing = [...proof.modes]
       .filter(([, solved]) => !solved.converged)
       .toSorted(([, a], [, b]) => a.heldFraction - b.heldFraction);
