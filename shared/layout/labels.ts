@@ -60,7 +60,8 @@ function bestLabel(space: Space, run: Run, candidates: Iterable<Candidate>, belo
   let best: Candidate | null = null;
   let least = below;
   for (const { label, cost: dislike } of candidates) {
-    let cost = dislike + conflict(space, label.box);
+    if (dislike >= least) continue;
+    let cost = dislike + conflict(space, label.box, undefined, least - dislike);
     if (cost < least && label.leader) cost += leaderConflict(space, label.leader, run.id);
     if (cost >= least) continue;
     best = { label, cost };
@@ -214,15 +215,15 @@ function* overLevel(segment: Segment, measures: Measures, cost: number, side: 'a
 
 /** Off the run, up and to the right first, then all round; as near as there is room, never along the run itself. */
 function* onLeader(segments: readonly Segment[], measures: Measures): Generator<Candidate> {
-  const longest = [...segments].sort((a, b) => b.length - a.length).slice(0, 3);
+  const longest = [...segments].sort((a, b) => b.length - a.length).slice(0, 2);
   const feet = longest.flatMap(({ from, to, length }) =>
-    (length < 32 ? [0.5] : [0.5, 0.3, 0.7, 0.15, 0.85]).map((part) => ({
+    (length < 32 ? [0.5] : [0.5, 0.25, 0.75]).map((part) => ({
       x: from.x + (to.x - from.x) * part,
       y: from.y + (to.y - from.y) * part,
       isUpright: from.x === to.x,
     })),
   );
-  for (const [ring, out] of [16, 24, 32, 44, 56, 72, 88].entries()) {
+  for (const [ring, out] of [16, 24, 32, 44, 60].entries()) {
     for (const at of feet) {
       for (const [i, [dx, dy]] of AROUND.entries()) {
         if ((at.isUpright ? dx : dy) === 0) continue;
@@ -262,7 +263,7 @@ function labelAt(x: number, y: number, anchor: 'start' | 'end', { text, code, wi
 function leaderConflict(space: Space, [foot, at]: readonly [Point, Point], runId: string): number {
   const length = Math.hypot(at.x - foot.x, at.y - foot.y);
   let sum = 0;
-  for (let along = 2; along < length - HOP_RADIUS; along += 6) {
+  for (let along = 2; along < length - HOP_RADIUS; along += 8) {
     const x = foot.x + ((at.x - foot.x) * along) / length;
     const y = foot.y + ((at.y - foot.y) * along) / length;
     sum += conflict(space, { x: x - 0.5, y: y - 0.5, width: 1, height: 1 }, runId);

@@ -67,8 +67,8 @@ export function takeRun(
   for (let i = 1; i < points.length; i++) take(space, segmentBox(points[i - 1]!, points[i]!, halfWidth), weight, owner);
 }
 
-/** How bad it would be to stand on `box`: nothing is 0. */
-export function conflict(space: Space, box: Box, except?: string): number {
+/** How bad it would be to stand on `box`: nothing is 0. No longer summed once it is `enough`. */
+export function conflict(space: Space, box: Box, except?: string, enough = Infinity): number {
   let sum = 0;
   const left = cellOf(box.x);
   const top = cellOf(box.y);
@@ -83,6 +83,7 @@ export function conflict(space: Space, box: Box, except?: string): number {
         // what spans several cells counts in the first one that both have
         if (column !== Math.max(left, cellOf(taken.box.x)) || row !== Math.max(top, cellOf(taken.box.y))) continue;
         sum += taken.weight;
+        if (sum >= enough) return sum;
       }
     }
   }

@@ -17,7 +17,7 @@ export function placeTags(space: Space, devices: readonly Device[]): Map<string,
   const waiting = devices.flatMap((device) => {
     if (tagLines(device).every((line) => line === '')) return [];
     const near = placesOf(device).slice(0, FIRST_CHOICES);
-    return [{ device, free: near.filter((tag) => conflict(space, tag.box, device.id) < 1).length }];
+    return [{ device, free: near.filter((tag) => conflict(space, tag.box, device.id, 1) < 1).length }];
   });
   const tags = new Map<string, TagLayout>();
   for (const { device } of waiting.sort((a, b) => a.free - b.free)) {
@@ -34,7 +34,8 @@ const FIRST_CHOICES = 8;
 export function placeTag(space: Space, device: Device, onlyFree = false): TagLayout | null {
   let best: { tag: TagLayout; cost: number } | undefined;
   for (const [i, tag] of placesOf(device).entries()) {
-    const cost = conflict(space, tag.box, device.id) + i * 0.001;
+    const dislike = i * 0.001;
+    const cost = dislike + conflict(space, tag.box, device.id, (best?.cost ?? Infinity) - dislike);
     if (best === undefined || cost < best.cost) best = { tag, cost };
     if (cost < 1) break;
   }

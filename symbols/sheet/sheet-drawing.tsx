@@ -66,7 +66,8 @@ export function SheetDrawing({ design, sheetId, layout, ink, titleBlock, inRevie
             <Stub key={stub.text} stub={stub} ink={ink} />
           ))}
           {drawn.label && <RunLabel label={drawn.label} ink={ink} />}
-          {ink.colourCodes && drawn.code && <ColourCode code={drawn.code} ink={ink} />}
+          {ink.colourCodes &&
+            drawn.codes.map((code) => <ColourCode key={`${code.x} ${code.y}`} code={code} ink={ink} />)}
         </g>
       ))}
       {devices.map((device) => {
