@@ -5,7 +5,9 @@ import { expect, test } from 'vitest';
 import { readDesign } from '#shared/files/read-design.ts';
 import { writeDesign } from '#shared/files/write-design.ts';
 import { boxOf, terminalsOf, UNIT } from '#shared/kinds/place.ts';
+import { layoutSheet } from '#shared/layout/layout-sheet.ts';
 import { frameBox, titleBlockBox } from '#shared/layout/paper.ts';
+import { faultsOf } from '#shared/layout/picture-faults.ts';
 import { partsList } from '#shared/lists/parts-list.ts';
 import { analyse } from '#shared/rules/analyse.ts';
 
@@ -53,6 +55,14 @@ test('every device stands on the grid, inside the frame and clear of the title b
       expect(isApart, `${device.mark} and ${other.mark}`).toBe(true);
     }
   }
+});
+
+test('the drawing of Minnow has nothing on top of anything, and a name at everything', () => {
+  const design = minnow();
+  const layout = layoutSheet(design, 'dc');
+  expect(faultsOf(design, 'dc', layout)).toEqual([]);
+  expect(Object.values(layout.runs).flatMap(({ label }) => label?.leader ?? [])).toEqual([]);
+  expect(Object.values(layout.runs).flatMap(({ hops }) => hops).length).toBeLessThanOrEqual(1);
 });
 
 test('every mark aboard Minnow is there once', () => {
