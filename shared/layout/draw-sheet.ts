@@ -139,19 +139,13 @@ function endsOf({ from, to }: SheetRun): readonly Point[] {
   return [from, to].flatMap((end) => (end === null ? [] : [end.terminal]));
 }
 
-/** Whether a box is near any of the lines; everything is when there are none given. */
+/** Whether a box is near what the lines span together; everything is when there are none given. */
 function nearness(lines: readonly (readonly Point[])[] | null, reach: number): (box: Box) => boolean {
   if (lines === null) return () => true;
-  const spans = lines.map((points) => {
-    const span = spanOf(points);
-    return {
-      x: span.x - reach,
-      y: span.y - reach,
-      width: span.width + 2 * reach,
-      height: span.height + 2 * reach,
-    };
-  });
-  return (box) => spans.some((span) => overlaps(span, { ...box, width: box.width + 1, height: box.height + 1 }));
+  const span = spanOf(lines.flat());
+  const [left, right] = [span.x - reach, span.x + span.width + reach];
+  const [top, bottom] = [span.y - reach, span.y + span.height + reach];
+  return ({ x, y, width, height }) => x <= right && x + width >= left && y <= bottom && y + height >= top;
 }
 
 function spanOf(points: readonly Point[]): Box {

@@ -10,7 +10,7 @@ import { considerSources, designCurrents, type ContactCurrent, type DesignCurren
 import { loadDemandOf, type LoadDemand } from './demand.ts';
 import { loadDrops, type DropMode, type LoadDrop } from './drop.ts';
 import { feederDrops, type FeederDrop } from './feeders.ts';
-import { flowOf } from './flow.ts';
+import { flowOf, type Flow } from './flow.ts';
 import { networkOf, type NetworkEdge, type RunEdge, type SourceEdge } from './network.ts';
 import { leastResistance, type Paths } from './paths.ts';
 import { isCrankingRun, protectionOf, type EndProtection } from './protection.ts';
@@ -122,7 +122,9 @@ export function proveDesign(design: Design): Proof {
   const runs = circuits.runs.map((edge) =>
     proveRun(edge, design, basis, circuits, regions, ampacities, currents, byRun, bundled, electronics),
   );
-  const longByEdge = new Map(loads.filter(isLong).map((load) => [load.edge.index, load.heldA]));
+  const longByEdge = new Map(
+    loads.filter((load) => isLong(load, design, flows)).map((load) => [load.edge.index, load.heldA]),
+  );
   const longLoad = allOn.spread((edge) => longByEdge.get(edge.index) ?? 0);
   const runOf = new Map(runs.map((run) => [run.id, run]));
   return {
@@ -158,8 +160,13 @@ export function ownModes(design: Design): EntityId[] {
     .toSorted();
 }
 
-function isLong(load: LoadDemand): boolean {
-  return (amountOf(ratingsOf(load.device), 'hoursPerDay') ?? 0) >= CONTINUOUS_LOAD_HOURS;
+/** By the hours that the load tells, else by those of the design's modes that hold it. */
+function isLong({ device, edge }: LoadDemand, design: Design, flows: ReadonlyMap<EntityId, Flow>): boolean {
+  const byModes = () =>
+    ownModes(design)
+      .filter((mode) => flows.get(mode)!.currentOf(edge) > 1e-9)
+      .reduce((sum, mode) => sum + (design.modes[mode]?.hoursPerDay ?? 0), 0);
+  return (amountOf(ratingsOf(device), 'hoursPerDay') ?? byModes()) >= CONTINUOUS_LOAD_HOURS;
 }
 
 function inService(design: Design): Device[] {

@@ -16,6 +16,8 @@ export interface EndProtection {
   readonly how: 'upstream' | 'near' | 'none';
   readonly device?: Device;
   readonly beside?: readonly Device[];
+  /** That feed it by other ways. */
+  readonly others?: readonly Device[];
   readonly ratedA?: number;
   readonly allowedRatingA?: number;
   /** Of the stub that no device protects: from the source of its current to the first device. */
@@ -56,7 +58,7 @@ export function protectionOf(
   if (!sides) return [];
   return (['from', 'to'] as const).flatMap((fromEnd) => {
     const [here, there] = fromEnd === 'from' ? [sides.from, sides.to] : [sides.to, sides.from];
-    return endProtection(edge, fromEnd, here, there, circuits, ampacity, basis) ?? [];
+    return endProtection(edge, fromEnd, here, there, circuits, regions, ampacity, basis) ?? [];
   });
 }
 
@@ -74,6 +76,7 @@ function endProtection(
   here: Side,
   there: Side,
   circuits: Circuits,
+  regions: Regions,
   ampacity: Ampacity,
   basis: FullBasis,
 ): EndProtection | undefined {
@@ -93,11 +96,37 @@ function endProtection(
   }
   if (!feeding) return undefined;
   const byUpstream = ratingOf(feeding, edge, ampacity, basis);
-  if (isAllowed(byUpstream) || !there.nearest) return { fromEnd, how: 'upstream', ...byUpstream };
+  if (isAllowed(byUpstream)) return { fromEnd, how: 'upstream', ...byUpstream };
+  const byOneAhead = seriesRating(edge, here, regions, ampacity, basis);
+  if (byOneAhead) return { fromEnd, how: 'upstream', ...byOneAhead };
+  const others = (here.feeders ?? [])
+    .map(({ device }) => device)
+    .filter((device) => device !== feeding.device && !feeding.beside.includes(device));
+  const upstream = { fromEnd, how: 'upstream', ...byUpstream, ...(others.length > 0 && { others }) } as const;
+  if (!there.nearest) return upstream;
   // A smaller conductor tapped from a larger one: its own device stands for it, if it is near enough.
   const byOwn = ratingOf(there.largest, edge, ampacity, basis);
-  if (!isAllowed(byOwn)) return { fromEnd, how: 'upstream', ...byUpstream };
+  if (!isAllowed(byOwn)) return upstream;
   return { fromEnd, how: 'near', source: feeding.device, stub: stubOf(edge, here, there, basis), ...byOwn };
+}
+
+/** Of devices in series, with no other way for current to come, the smallest protects what is behind all of them. */
+function seriesRating(
+  edge: RunEdge,
+  { feeders = [] }: Side,
+  regions: Regions,
+  ampacity: Ampacity,
+  basis: FullBasis,
+): Rating | undefined {
+  const seen = new Set<EntityId>();
+  let ahead = feeders.length === 1 ? regions.onlyOneAhead(feeders[0]!.device.id) : undefined;
+  while (ahead && !seen.has(ahead.device.id)) {
+    seen.add(ahead.device.id);
+    const rating = ratingOf(ahead, edge, ampacity, basis);
+    if (isAllowed(rating)) return rating;
+    ahead = regions.onlyOneAhead(ahead.device.id);
+  }
+  return undefined;
 }
 
 /** From a terminal of one battery straight to one of another in its bank, whatever else hangs there. */

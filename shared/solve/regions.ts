@@ -18,6 +18,7 @@ export interface Side {
   /** The first devices of greatest rating: all of them, and those that feed this region. */
   readonly largest?: Guard;
   readonly feeding?: Guard;
+  readonly feeders?: readonly Guard[];
   /** A battery that stands on another with its negative here: the link between them is inside their bank. */
   readonly stacked?: Bank;
   readonly hasBattery: boolean;
@@ -56,6 +57,8 @@ export interface Regions {
   sidesOf(run: EntityId): { readonly from: Side; readonly to: Side } | undefined;
   /** Whether a protective device is the first one in series with a battery. */
   isMain(device: EntityId): boolean;
+  /** The one device through which all current comes that can reach a device; undefined where there are more ways. */
+  onlyOneAhead(device: EntityId): Guard | undefined;
   /** Protective devices ahead of a device, the nearest first, as far as one feeds the other. */
   upstreamOf(device: EntityId): readonly EntityId[];
 }
@@ -73,8 +76,10 @@ export function regionsOf(circuits: Circuits, basis: FullBasis): Regions {
     .filter((edge) => isGate(edge))
     .filter((gate) => regions.rootOf(gate.a) !== regions.rootOf(gate.b));
   const gatesAt = new Map<number, ContactEdge[]>();
+  const gatesOf = new Map<EntityId, ContactEdge[]>();
   for (const gate of gates) {
-    for (const node of [gate.a, gate.b]) gatesAt.set(node, [...(gatesAt.get(node) ?? []), gate]);
+    for (const node of [gate.a, gate.b]) pushTo(gatesAt, node, gate);
+    pushTo(gatesOf, gate.device.id, gate);
   }
   const guards = guardsOf(gates, regions);
   const sourcesAt = (node: number) => unprotectedSourcesAt(circuits, basis, node);
@@ -93,7 +98,14 @@ export function regionsOf(circuits: Circuits, basis: FullBasis): Regions {
       };
       const guard = guards.get(gate.index)!;
       const feeding = feeds.has(feedKey(gate, regions.rootOf(node))) ? guard : undefined;
-      side = merge(side, { nearest: reach, largest: guard, feeding, hasBattery: false, hasStarter: false });
+      side = merge(side, {
+        nearest: reach,
+        largest: guard,
+        feeding,
+        feeders: feeding && [feeding],
+        hasBattery: false,
+        hasStarter: false,
+      });
     }
     for (const edge of network.edgesAt(node)) {
       if (edge.type === 'source' && edge.b === node && circuits.netOf(node).side === 'fed') {
@@ -120,10 +132,18 @@ export function regionsOf(circuits: Circuits, basis: FullBasis): Regions {
       return edge && { from: messages.side(edge, edge.a), to: messages.side(edge, edge.b) };
     },
     isMain: (device) => mains.has(device),
+    onlyOneAhead(deviceId) {
+      const [gate, ...poles] = gatesOf.get(deviceId) ?? [];
+      if (!gate || poles.length > 0) return undefined;
+      const behind = [gate.a, gate.b].filter((node) => !feeds.has(feedKey(gate, regions.rootOf(node))));
+      const side = behind.length === 1 ? messages.whole(behind[0]!) : NOTHING;
+      const [only, ...more] = (side.feeders ?? []).filter(({ device }) => device.id !== deviceId);
+      return side.source || more.length > 0 ? undefined : only;
+    },
     upstreamOf(deviceId) {
       const ahead: EntityId[] = [];
       const seen = new Set([deviceId]);
-      let gate = gates.find((each) => each.device.id === deviceId);
+      let gate = gatesOf.get(deviceId)?.[0];
       while (gate) {
         const before: Device | undefined = [gate.a, gate.b]
           .map((node) => messages.whole(node).feeding?.device)
@@ -131,11 +151,17 @@ export function regionsOf(circuits: Circuits, basis: FullBasis): Regions {
         if (!before) break;
         seen.add(before.id);
         ahead.push(before.id);
-        gate = gates.find((each) => each.device.id === before.id);
+        gate = gatesOf.get(before.id)?.[0];
       }
       return ahead;
     },
   };
+}
+
+function pushTo<Key, Item>(lists: Map<Key, Item[]>, key: Key, item: Item): void {
+  const list = lists.get(key);
+  if (list) list.push(item);
+  else lists.set(key, [item]);
 }
 
 function isInner(edge: NetworkEdge): boolean {
@@ -155,7 +181,7 @@ function guardsOf(gates: readonly ContactEdge[], regions: Union): ReadonlyMap<nu
   const together = new Map<string, ContactEdge[]>();
   for (const gate of gates) {
     const ends = [regions.rootOf(gate.a), regions.rootOf(gate.b)].toSorted((a, b) => a - b).join(' ');
-    together.set(ends, [...(together.get(ends) ?? []), gate]);
+    pushTo(together, ends, gate);
   }
   const guards = new Map<number, Guard>();
   for (const group of together.values()) {
@@ -206,7 +232,7 @@ function feedingGates(
   for (const gate of gates) {
     for (const node of [gate.a, gate.b]) {
       const region = regions.rootOf(node);
-      gatesOf.set(region, [...(gatesOf.get(region) ?? []), gate]);
+      pushTo(gatesOf, region, gate);
     }
   }
   const feeds = new Set<string>();
@@ -355,6 +381,7 @@ function merge(a: Side, b: Side): Side {
     nearest: nearer(a.nearest, b.nearest),
     largest: greater(a.largest, b.largest),
     feeding: greater(a.feeding, b.feeding),
+    feeders: a.feeders && b.feeders ? [...a.feeders, ...b.feeders] : (a.feeders ?? b.feeders),
     stacked: a.stacked ?? b.stacked,
     hasBattery: a.hasBattery || b.hasBattery,
     hasStarter: a.hasStarter || b.hasStarter,

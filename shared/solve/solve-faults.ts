@@ -10,7 +10,7 @@ import { prepareCircuit, solveCircuit, type Circuit, type StiffBranch } from './
 import { runOhmAt } from './conductor.ts';
 import { factorise, probe, type Factor } from './laplacian.ts';
 import { networkOf, walkFrom, type ContactEdge, type Network, type NetworkEdge } from './network.ts';
-import { amountOf, ratingsOf } from './ratings.ts';
+import { amountOf } from './ratings.ts';
 
 /**
  * What every fuse and breaker must break, and what must still open it. Greatest: copper at 20 °C, batteries full
@@ -118,7 +118,8 @@ function isProtective(edge: NetworkEdge): edge is ContactEdge {
 }
 
 function isOhmTold(device: Device): boolean {
-  return amountOf(ratingsOf(device), 'coldMilliohm') !== undefined;
+  // What the kind fills in is a guess too.
+  return amountOf(device.ratings, 'coldMilliohm') !== undefined;
 }
 
 interface Short {

@@ -150,8 +150,12 @@ function thickerPath(proof: Proof, drop: Lost, limitV: number, besideV: number):
       const next = sizes.filter((step) => isOpen(step) && thicker(step.size)).toSorted((a, b) => b.volts - a.volts)[0];
       if (!next) break;
       const size = thicker(next.size)!;
-      next.volts *= ohmPerMetre(proof, next.proved, size) / ohmPerMetre(proof, next.proved, next.size);
-      next.size = size;
+      const { cable } = next.proved.run;
+      for (const step of sizes) {
+        if (step !== next && (cable === undefined || step.proved.run.cable !== cable)) continue;
+        step.volts *= ohmPerMetre(proof, step.proved, size) / ohmPerMetre(proof, step.proved, step.size);
+        step.size = size;
+      }
     }
     if (needed(lostV())) continue;
     const changed = sizes.filter((step, i) => step.size !== steps[i]!.size);

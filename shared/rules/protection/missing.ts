@@ -99,8 +99,8 @@ function fuseRating(proof: Proof, run: ProvedRun): number | undefined {
   );
   const neededA = run.designCurrentA * CONTINUOUS_LOAD_FACTOR;
   const isAllowed = (ratedA: number) => ratedA <= mostA * (1 + 1e-9);
-  // What no mode sends current through is for what nobody has reckoned with: then the wire sets the rating.
-  if (neededA === 0) return standardRatings(FUSE.family).findLast(isAllowed);
+  // What no mode sends current through is for what nobody has reckoned with: no rating can be named.
+  if (neededA < 1e-3) return undefined;
   return standardRatings(FUSE.family).find((ratedA) => ratedA >= neededA && isAllowed(ratedA));
 }
 

@@ -8,6 +8,7 @@ import { leastRatingA } from '#shared/rules/protection-load.ts';
 import type { Proof, ProvedRun } from '#shared/solve/proof.ts';
 import { familyOf } from '#shared/solve/protection.ts';
 import { callOf } from '#shared/solve/ratings.ts';
+import { smallestByAmpacity } from '#shared/solve/sizes.ts';
 import { nextRatingDown } from '#shared/tables/protection.ts';
 
 /**
@@ -33,7 +34,7 @@ export const ratingAboveAmpacity = defineRule({
 
   *check(proof) {
     for (const run of proof.runs) {
-      for (const { device, beside = [], ratedA, allowedRatingA } of run.protection) {
+      for (const { device, beside = [], others = [], ratedA, allowedRatingA } of run.protection) {
         if (!device || ratedA === undefined || allowedRatingA === undefined || run.ampacity.allowedA <= 0) continue;
         if (ratedA <= allowedRatingA * (1 + 1e-9)) continue;
         yield {
@@ -49,7 +50,7 @@ export const ratingAboveAmpacity = defineRule({
             beside.length === 0
               ? undefined
               : '{device} side by side pass {ratedA} before they open; {run} carries {allowedA}, so no more than {allowedRatingA} may stand ahead of it.',
-          remedies: remediesFor(proof, run, device, beside.length > 0, allowedRatingA),
+          remedies: remediesFor(proof, run, device, beside.length + others.length > 0, allowedRatingA),
         };
       }
     }
@@ -69,8 +70,9 @@ function remediesFor(
   if (!isOneOfMany && fittingA !== undefined && fittingA >= leastRatingA(proof, device.id) && mayChange(device)) {
     ways.push({ isNew: workOf(device) === 'new', remedy: useRating(device, fittingA) });
   }
-  if (run.recommendedSize !== null && mayChange(run.run)) {
-    ways.push({ isNew: workOf(run.run) === 'new', remedy: useSize(proof, run, run.recommendedSize) });
+  const size = run.recommendedSize ?? (run.isSignal ? null : smallestByAmpacity(run.sizing));
+  if (size !== null && mayChange(run.run)) {
+    ways.push({ isNew: workOf(run.run) === 'new', remedy: useSize(proof, run, size) });
   }
   return [...ways.filter((way) => way.isNew), ...ways.filter((way) => !way.isNew)].map((way) => way.remedy);
 }
