@@ -115,8 +115,9 @@ export class DrawingDesk {
     return this.ledger.locator(`tr[data-run="${mark}"]`);
   }
 
-  /** Types into a cell of the run ledger and keeps it with Enter. */
+  /** Types into a cell of the run ledger and keeps it with Enter. A run out of view is sought by its mark first. */
   async type(mark: string, column: string, text: string): Promise<void> {
+    if (!(await this.row(mark).isVisible())) await this.page.getByLabel('Filter runs').fill(mark);
     const titles = await this.ledger.getByRole('columnheader').allInnerTexts();
     const cell = this.row(mark).getByRole('gridcell').nth(titles.indexOf(column));
     await cell.click();
@@ -124,5 +125,6 @@ export class DrawingDesk {
     if ((await cell.getByRole('textbox').count()) === 0) await this.page.keyboard.press('Enter');
     await cell.getByRole('textbox').fill(text);
     await this.page.keyboard.press('Enter');
+    await this.page.getByLabel('Filter runs').fill('');
   }
 }
