@@ -74,8 +74,9 @@ const ELECTRONICS: ReadonlySet<string> = new Set(['radio', 'instrument']);
 export function proveDesign(design: Design): Proof {
   const basis = basisOf(design);
   const modeIds = [...BUILT_IN_MODES, ...ownModes(design)];
-  const modes = new Map(modeIds.map((mode) => [mode, solveMode(design, mode)] as const));
-  const network = networkOf(design, 'all-on');
+  const networks = new Map(modeIds.map((mode) => [mode, networkOf(design, mode)] as const));
+  const modes = new Map(modeIds.map((mode) => [mode, solveMode(design, mode, networks.get(mode))] as const));
+  const network = networks.get('all-on')!;
   const circuits = circuitsOf(network, design, basis);
   const regions = regionsOf(circuits, basis);
   const loads = network.edges.flatMap((edge) => (edge.type === 'load' ? [loadDemandOf(edge)] : []));
@@ -108,7 +109,7 @@ export function proveDesign(design: Design): Proof {
     ids.map((mode) => ({
       mode,
       flow: flows.get(mode)!,
-      network: mode === 'all-on' ? network : networkOf(design, mode),
+      network: networks.get(mode)!,
       circuits,
     }));
   const byOwnModes = loadDrops(loads, dropModes(judged), basis);
@@ -142,7 +143,7 @@ export function proveDesign(design: Design): Proof {
     drops,
     feeders: feederDrops(drops, circuits, basis, reckoned.demandOn),
     modes,
-    faults: solveFaults(design),
+    faults: solveFaults(design, network),
     currentThrough: (device) => {
       const through = network.contactsOf(device).map((edge) => reckoned.contactAt(edge));
       return {

@@ -19,8 +19,7 @@ import { amountOf } from './ratings.ts';
  * selector is closed, as it may be at the worst moment. In the greatest fault a protective device counts with the
  * resistance somebody entered or with none: a guess may not stand between a battery and what has to break its current.
  */
-export function solveFaults(design: Design): Record<EntityId, FaultAnalysis> {
-  const network = networkOf(design, 'all-on');
+export function solveFaults(design: Design, network = networkOf(design, 'all-on')): Record<EntityId, FaultAnalysis> {
   const greatest = stageOf(network, 'greatest');
   const least = stageOf(network, 'least');
   const bases = basesOf(network, greatest);

@@ -12,8 +12,7 @@ import type { StiffBranch } from './circuit.ts';
  * A design solved in one mode, built-in or its own. It never throws and every number is finite, whatever the
  * design: what can't be worked out is zero, and `converged` is false.
  */
-export function solveMode(design: Design, modeId: EntityId): ModeAnalysis {
-  const network = networkOf(design, modeId);
+export function solveMode(design: Design, modeId: EntityId, network = networkOf(design, modeId)): ModeAnalysis {
   const plan = planOf(network);
   const outcome = findOperatingPoint(plan);
   const flows = flowsOf(network, plan, outcome);

@@ -17,6 +17,26 @@ function bilgePump(size: string, criticalLimit?: number) {
     .build();
 }
 
+/** A panel of two fused branches, 30 A and 20 A, on 8 AWG. */
+function panelFedBy(lengthM: number) {
+  return aDesign()
+    .battery()
+    .fuse('F1', 80, noDrop, { mountedOn: { device: 'g1', terminal: 'pos' } })
+    .busbar('X1', 'dc+')
+    .busbar('X2', 'dc-')
+    .fuse('F2', 40, noDrop, { mountedOn: { device: 'x1', terminal: '2' } })
+    .fuse('F3', 40, noDrop, { mountedOn: { device: 'x1', terminal: '3' } })
+    .load('E1', 30)
+    .load('E2', 20)
+    .run('W1', 'F1.b', 'X1.1', lengthM, '8 AWG')
+    .run('W2', 'X2.1', 'G1.neg', lengthM, '8 AWG')
+    .run('W3', 'F2.b', 'E1.pos', 0.5, '8 AWG')
+    .run('W4', 'E1.neg', 'X2.2', 0.5, '8 AWG')
+    .run('W5', 'F3.b', 'E2.pos', 0.5, '8 AWG')
+    .run('W6', 'E2.neg', 'X2.3', 0.5, '8 AWG')
+    .build();
+}
+
 testRule(voltageDrop, {
   right: [
     { name: 'the bilge pump on 12 AWG at 3 %', given: bilgePump('12 AWG') },
@@ -45,6 +65,7 @@ testRule(voltageDrop, {
       name: 'a run whose measured resistance is small',
       given: fusedRun(15, { size: '16 AWG', loadA: 10, lengthM: 30, runIs: { milliohm: 5 }, fuse: noDrop }),
     },
+    { name: "a panel's feeder just within 3 %", given: panelFedBy(1.685) },
   ],
   wrong: [
     {
@@ -138,6 +159,32 @@ testRule(voltageDrop, {
       says: [
         'E1 loses 0.46 V of its 12 V, 3.9 %, while the short-time loads on its path run; 3 % is the limit for what lasts.',
       ],
+    },
+    {
+      // 10.75 / 0.3048 / 16,510 = 2.1362 mΩ/m of 8 AWG; 7 m there and back at 50 A: 0.7477 V.
+      name: "a panel's feeder that all its branches together are too much for",
+      given: panelFedBy(3.5),
+      says: [
+        'The feeder of X1 loses 0.75 V of 12 V there and back with all that its branches ask for, 6.2 %; 3 % is the limit. W1 has the greatest part, 0.37 V.',
+      ],
+      figures: { lostV: 0.7477, fraction: 0.0623 },
+      remedies: ['Use 4 AWG for W1 and W2'],
+    },
+    {
+      // 0.36 V / 50 A / 2.1362 mΩ/m = 3.3704 m there and back.
+      name: "a panel's feeder just beyond 3 %",
+      given: panelFedBy(1.6855),
+      says: [
+        'The feeder of X1 loses 0.36 V of 12 V there and back with all that its branches ask for, 3.001 %; 3 % is the limit. W1 has the greatest part, 0.18 V.',
+      ],
+    },
+    {
+      name: 'two cores of one cable, which are sized together',
+      given: fusedRun(15, { loadA: 10, lengthM: 10, size: '16 AWG', fuse: noDrop, runIs: { cable: 'c1' } }),
+      says: [
+        'E1 loses 2.73 V of its 12 V on the way there and back, 22.8 %; 10 % is the limit. W1 has the greatest part, 1.37 V.',
+      ],
+      remedies: ['Use 10 AWG for W1 and W2'],
     },
   ],
 });

@@ -47,6 +47,14 @@ testRule(interruptRating, {
         .run('W3', 'E1.neg', 'G1.neg', 1, '10 AWG')
         .build(),
     },
+    {
+      name: 'a fuse for 58 V on a LiFePO4 bank that is charged to 58 V',
+      given: fusedRun(15, {
+        battery: { chemistry: 'lifepo4', nominalV: 51.2, emfV: 53, chargeV: 58, internalMilliohm: 20 },
+        load: { nominalV: 48 },
+        fuse: { maxV: 58 },
+      }),
+    },
   ],
   wrong: [
     {
@@ -86,6 +94,25 @@ testRule(interruptRating, {
         fuse: { interruptA: 2000, coldMilliohm: 0.3 },
       }),
       says: ['F1 can break 2,000 A; a short circuit sends 2,977 A through it.'],
+    },
+    {
+      // 12.8 V behind 5 mΩ: 2,560 A. What a blade fuse of 10 A itself adds is only guessed, and a guess protects nobody.
+      name: 'a small blade fuse whose own resistance nobody has entered',
+      given: fusedRun(10, { fuse: { interruptA: 1000, maxV: 32, family: 'blade' } }),
+      says: ['F1 can break 1,000 A; a short circuit sends 2,560 A through it.'],
+      remedies: ['Use a class T fuse of 10 A for F1'],
+    },
+    {
+      name: 'a fuse for 32 V on a bank of 48 V, however much it breaks below that',
+      given: fusedRun(15, {
+        battery: { nominalV: 48, emfV: 51, internalMilliohm: 20 },
+        load: { nominalV: 48 },
+        fuse: { interruptA: 20_000, maxV: 32, coldMilliohm: 0 },
+      }),
+      says: [
+        'F1 can break 20,000 A at 32 V and below; its circuit can stand at 57.6 V, and a short circuit sends 2,550 A through it.',
+      ],
+      remedies: ['Use a class T fuse of 15 A for F1'],
     },
   ],
 });

@@ -35,6 +35,18 @@ testRule(ratingAboveAmpacity, {
         .run('W4', 'E1.neg', 'G1.neg', 1, '16 AWG')
         .build(),
     },
+    {
+      name: 'a breaker of 70 A on 10 AWG behind the only main fuse, of 60 A',
+      given: aDesign()
+        .battery()
+        .fuse('F1', 60, {}, { mountedOn: { device: 'g1', terminal: 'pos' } })
+        .fuse('F2', 70)
+        .load('E1', 20)
+        .run('W1', 'F1.b', 'F2.a', 1, '10 AWG')
+        .run('W2', 'F2.b', 'E1.pos', 1, '10 AWG')
+        .run('W3', 'E1.neg', 'G1.neg', 1, '10 AWG')
+        .build(),
+    },
   ],
   wrong: [
     {
@@ -81,6 +93,24 @@ testRule(ratingAboveAmpacity, {
         .build(),
       says: ['F1 is rated 200 A; W3 carries 25 A, so no more than 25 A may stand ahead of it.'],
       remedies: ['Use 25 A for F1', 'Use 3 AWG for W3'],
+    },
+    {
+      name: 'two fuses side by side, which open only together',
+      given: aDesign()
+        .battery()
+        .fuse('F1', 60, {}, { mountedOn: { device: 'g1', terminal: 'pos' } })
+        .fuse('F2', 60, {}, { mountedOn: { device: 'g1', terminal: 'pos' } })
+        .busbar('X1', 'dc+')
+        .load('E1', 50)
+        .run('W1', 'F1.b', 'X1.1', 0, '10 AWG', { link: true })
+        .run('W2', 'F2.b', 'X1.2', 0, '10 AWG', { link: true })
+        .run('W3', 'X1.3', 'E1.pos', 1, '10 AWG')
+        .run('W4', 'E1.neg', 'G1.neg', 1, '10 AWG')
+        .build(),
+      says: ['W1', 'W2', 'W3'].map(
+        (run) =>
+          `F1 and F2 side by side pass 120 A before they open; ${run} carries 60 A, so no more than 60 A may stand ahead of it.`,
+      ),
     },
   ],
 });

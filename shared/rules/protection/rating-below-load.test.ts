@@ -80,5 +80,16 @@ testRule(ratingBelowLoad, {
       given: fusedRun(10, { loadA: 10.1, size: '4 mm²', basis: iso }),
       says: ['F1 is rated 10 A; 10.1 A flows through it.'],
     },
+    {
+      name: 'a load that a mode of four hours a day holds',
+      given: {
+        ...fusedRun(10, { loadA: 9 }),
+        modes: { anchor: { id: 'anchor', name: 'At anchor', hoursPerDay: 4, states: {} } },
+      },
+      severity: 'should',
+      says: [
+        'F1 is rated 10 A; with loads that are on for 3 h or more counted at 125 %, 11.3 A should be its rating at least.',
+      ],
+    },
   ],
 });

@@ -47,6 +47,19 @@ testRule(tooFarFromSource, {
     { name: '200 mm bare in the ISO profile', given: fuseAt(0.2, bare, { iso: true }) },
     { name: '1.8 m in a sheath in the ISO profile', given: fuseAt(1.8, sheath, { iso: true }) },
     { name: 'a length that nobody has told', given: fuseAt(0, { lengthM: undefined }) },
+    {
+      name: 'a bare jumper inside a bank whose fuse sits on one of its studs',
+      given: aDesign()
+        .battery('G1')
+        .battery('G2')
+        .fuse('F1', 30, {}, { mountedOn: { device: 'g1', terminal: 'pos' } })
+        .load('E1', 5)
+        .run('W1', 'G1.pos', 'G2.pos', 0.3, '2 AWG', bare)
+        .run('W2', 'G1.neg', 'G2.neg', 0.3, '2 AWG', bare)
+        .run('W3', 'F1.b', 'E1.pos', 1, '10 AWG')
+        .run('W4', 'E1.neg', 'G2.neg', 1, '10 AWG')
+        .build(),
+    },
   ],
   wrong: [
     {
@@ -101,6 +114,24 @@ testRule(tooFarFromSource, {
         .build(),
       says: ['F1 stands 1 m from G1 along W1 and W2; 0.178 m is the most for a bare run.'],
       remedies: ['Sheathe W2'],
+    },
+    {
+      name: 'a second battery without a fuse: one finding, on its own run, whatever hangs beyond',
+      given: aDesign()
+        .battery('G1')
+        .battery('G2')
+        .fuse('F1', 30, {}, { mountedOn: { device: 'g1', terminal: 'pos' } })
+        .device('Q1', 'selector', { continuousA: 200 })
+        .fuse('F3', 30)
+        .load('E1', 5)
+        .run('W1', 'F1.b', 'Q1.1', 1, '10 AWG', sheath)
+        .run('W2', 'G2.pos', 'Q1.2', 2, '10 AWG', sheath)
+        .run('W3', 'Q1.common', 'F3.a', 1, '10 AWG', sheath)
+        .run('W4', 'F3.b', 'E1.pos', 1, '10 AWG')
+        .run('W5', 'E1.neg', 'G1.neg', 1, '10 AWG')
+        .run('W6', 'G1.neg', 'G2.neg', 1, '10 AWG')
+        .build(),
+      says: ['F1 stands 9 ft 10 in from G2 along W2 and W1; 6 ft is the most in a sheath or enclosure.'],
     },
   ],
 });

@@ -54,5 +54,15 @@ testRule(ratingUnknown, {
       given: fusedRun(15, { ...known, size: '4 mm²', fuse: fuse({ interruptA: undefined }), basis: iso }),
       says: ['F1 does not say what it can interrupt (it has to be 2,977 A or more).'],
     },
+    {
+      name: 'a battery of no capacity, about which nothing could be worked out',
+      given: fusedRun(15, { battery: { capacityAh: 0 } }),
+      says: ['G1 does not say its capacity (more than 0).'],
+    },
+    {
+      name: 'a load below nothing',
+      given: fusedRun(15, { loadA: -50 }),
+      says: ['E1 does not say what current it takes (more than 0).'],
+    },
   ],
 });
