@@ -1,4 +1,5 @@
 import { useQuery } from '@tanstack/react-query';
+import type { CSSProperties } from 'react';
 import { Link, useParams } from 'react-router';
 
 import { may } from '#shared/access/matrix.ts';
@@ -42,7 +43,11 @@ export function RevisionRoute() {
             <span>revision {issued.letter}, frozen</span>
           </div>
         </Link>
-        <nav className="path revisions-path" aria-label="Revisions" style={{ flexBasis: 72 * (all.data?.length ?? 1) }}>
+        <nav
+          className="path revisions-path"
+          aria-label="Revisions"
+          style={{ '--path-width': `${72 * (all.data?.length ?? 1)}px` } as CSSProperties}
+        >
           {(all.data ?? [issued]).map((one) => (
             <Link
               key={one.letter}

@@ -69,7 +69,11 @@ function Field({ field }: { readonly field: BasisField }) {
           look="plain"
           className="to-default"
           aria-label={`${field.caption}: back to the default`}
-          onClick={() => change(undefined)}
+          onClick={(event) => {
+            // The button goes with the value; whoever used the keyboard stays at the field.
+            event.currentTarget.closest('label')?.querySelector<HTMLElement>('.in')?.focus();
+            change(undefined);
+          }}
         >
           Back to the default
         </Button>

@@ -69,9 +69,8 @@ export function FindingParticulars({
       )}
       {fault !== undefined && (
         <>
-          <h3>
-            Fault level<span>{fault.basis}</span>
-          </h3>
+          <h3>Fault level</h3>
+          <p className="fault-basis quiet">{fault.basis}</p>
           <div className="cells three">
             <Cell caption="Greatest through it">{formatA(fault.greatestA)}</Cell>
             <Cell caption="Least it must clear">{formatA(fault.leastA)}</Cell>

@@ -172,7 +172,7 @@ export function FindingsPage({ vesselId, myName }: { readonly vesselId: string; 
           </aside>
         )}
       </div>
-      <FindingsStrip vesselId={vesselId} findings={findings} chosen={chosen} />
+      <FindingsStrip vesselId={vesselId} findings={analysis === null ? null : findings} chosen={chosen} />
     </>
   );
 }
@@ -235,19 +235,21 @@ function FindingsStrip({
   chosen,
 }: {
   readonly vesselId: string;
-  readonly findings: readonly Finding[];
+  /** Null until the check has answered: nothing is said to be free of findings before. */
+  readonly findings: readonly Finding[] | null;
   readonly chosen: Finding | undefined;
 }) {
   const design = useOpenDesign((open) => open.design);
   const counts = (['must', 'should', 'note'] as const).map((severity) => ({
     severity,
-    n: findings.filter((finding) => finding.severity === severity && finding.accepted !== true).length,
+    n: (findings ?? []).filter((finding) => finding.severity === severity && finding.accepted !== true).length,
   }));
   const place = chosen === undefined ? undefined : placeOfFinding(design, chosen);
   const shown = chosen === undefined || place === undefined ? null : addressOnSheet(vesselId, chosen, place);
   return (
     <footer className="strip">
-      {counts.map(({ severity, n }) => (
+      {findings === null && <span className="quiet">Checking</span>}
+      {(findings === null ? [] : counts).map(({ severity, n }) => (
         <Severity key={severity} of={severity}>
           {n} {{ must: 'must fix', should: 'should fix', note: n === 1 ? 'note' : 'notes' }[severity]}
         </Severity>

@@ -16,8 +16,14 @@ export function IssueRevision({ vesselId, primary }: { readonly vesselId: string
   const letter = letterAfter(revisions.data?.map((row) => row.letter));
   return (
     <>
-      <Button look={primary ? 'go' : 'normal'} className="issue" onClick={() => setIsOpen(true)}>
-        Issue revision {letter}
+      <Button
+        look={primary ? 'go' : 'normal'}
+        className="issue"
+        aria-label={`Issue revision ${letter}`}
+        onClick={() => setIsOpen(true)}
+      >
+        Issue <span className="desk-only">revision </span>
+        {letter}
       </Button>
       {isOpen && <IssueDialog vesselId={vesselId} letter={letter} onClose={() => setIsOpen(false)} />}
     </>

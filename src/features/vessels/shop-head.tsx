@@ -1,5 +1,5 @@
 import { useQueryClient } from '@tanstack/react-query';
-import type { ReactNode } from 'react';
+import type { CSSProperties, ReactNode } from 'react';
 import { Link, NavLink, useNavigate } from 'react-router';
 
 import type { Me } from '#shared/api/me.ts';
@@ -36,7 +36,7 @@ export function ShopHead({
           <span>{shop === undefined ? 'vessels shared with you' : 'shop, with Ampwright'}</span>
         </div>
       </Link>
-      <nav className="path" aria-label="Shop" style={{ flexBasis: 140 }}>
+      <nav className="path" aria-label="Shop" style={{ '--path-width': '140px' } as CSSProperties}>
         <NavLink to="/" end>
           <b>Vessels</b>
           <span>{says ?? ' '}</span>
