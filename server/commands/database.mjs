@@ -225,10 +225,11 @@ function refusal(folder, reason) {
   if (/No space left|(errno|Errcode|OS error|error number)[: "]*28\b|Disk is full/i.test(reason)) {
     return new Stopped(`The disk is full: the database in ${folder} can not start. Free some space and start again.`);
   }
+  // The first error is the cause, what comes after it its consequences.
   const said = reason
     .split('\n')
     .filter((line) => /\[ERROR\]|error|FATAL/i.test(line) && !line.endsWith('Aborting'))
-    .slice(-2)
+    .slice(0, 2)
     .map((line) => line.replace(/^.*\[ERROR\]\s*/, '').trim())
     .join(' ');
   return new Stopped(

@@ -115,7 +115,7 @@ test(`server, database or both die ${KILLS} times amid edits: nothing acknowledg
       since = page.changes.at(-1)!.seq;
     }
   }
-}, 180_000);
+}, 300_000);
 
 function pause(milliseconds: number): Promise<void> {
   return new Promise((done) => setTimeout(done, milliseconds));

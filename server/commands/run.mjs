@@ -1,5 +1,5 @@
 import { spawn } from 'node:child_process';
-import { resolve } from 'node:path';
+import { join, resolve } from 'node:path';
 
 import { Stopped } from './stopped.mjs';
 
@@ -8,9 +8,10 @@ export const ROOT = resolve(import.meta.dirname, '../..');
 const running = new Set();
 
 /** Runs a program to its end. Answers its exit code and what it said; says nothing itself. */
-export function runQuietly(command, args, { cwd = ROOT, env = process.env } = {}) {
+export function runQuietly(command, args, { cwd = ROOT, env = process.env, withParent = false } = {}) {
   return new Promise((done) => {
-    const child = spawn(command, args, { cwd, env, stdio: ['ignore', 'pipe', 'pipe'] });
+    const stdio = ['ignore', 'pipe', 'pipe', ...(withParent ? ['ipc'] : [])];
+    const child = spawn(command, args, { cwd, env, stdio });
     running.add(child);
     let said = '';
     child.stdout.on('data', (data) => (said += data));
@@ -39,9 +40,13 @@ function shorten(said) {
   return (lines.length <= 24 ? lines : [...lines.slice(0, 12), '…', ...lines.slice(-12)]).join('\n');
 }
 
-/** Runs one of our TypeScript commands. */
+/** Runs one of our TypeScript commands, which ends when this one dies: else it would write on behind the next start. */
 export function runTypeScript(sentence, file, args, env) {
-  return runOrStop(sentence, process.execPath, ['--import', 'tsx', file, ...args], { env: { ...process.env, ...env } });
+  const nodeArgs = ['--import', 'tsx', '--import', join(import.meta.dirname, 'with-parent.mjs')];
+  return runOrStop(sentence, process.execPath, [...nodeArgs, file, ...args], {
+    env: { ...process.env, ...env },
+    withParent: true,
+  });
 }
 
 /** Ends whatever `runQuietly` has running. */

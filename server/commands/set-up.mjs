@@ -80,6 +80,11 @@ function serverEnvironment({ settings, dataFolder, secrets, url, isOurs }) {
 async function emptyDatabase(database) {
   const { createConnection } = await import('mysql2/promise');
   const connection = await createConnection({ uri: database.url });
+  // Nobody may still be filling it: what a killed start left behind can outlive it by a moment.
+  const [others] = await connection.query(
+    'SELECT id FROM information_schema.processlist WHERE user = SUBSTRING_INDEX(USER(), "@", 1) AND id <> CONNECTION_ID()',
+  );
+  for (const { id } of others) await connection.query(`KILL ${id}`).catch(() => {}); // gone by itself meanwhile
   const [[{ name }]] = await connection.query('SELECT DATABASE() AS name');
   await connection.query(`DROP DATABASE \`${name}\``);
   await connection.query(`CREATE DATABASE \`${name}\` CHARACTER SET utf8mb4 COLLATE utf8mb4_unicode_ci`);

@@ -10,8 +10,8 @@ import { afterAll, afterEach, beforeAll, describe, expect, test } from 'vitest';
 
 import { createVessel, listVessels } from '#shared/api/vessels.ts';
 
-import { startDatabase } from './database.mjs';
-import { signIn, type Credentials } from './person.ts';
+import { startDatabase, type RunningDatabase } from './database.mjs';
+import { signIn, type Credentials, type Person } from './person.ts';
 import { ROOT } from './run.mjs';
 
 const running: Start[] = [];
@@ -20,49 +20,63 @@ let trials: string;
 beforeAll(() => {
   trials = mkdtempSync(join(tmpdir(), 'ampwright-start-'));
 });
-afterEach(async () => {
-  for (const start of running.splice(0)) await start.end('SIGTERM');
+afterAll(async () => {
+  await endAll();
+  rmSync(trials, { recursive: true, force: true });
 });
-afterAll(() => rmSync(trials, { recursive: true, force: true }));
 
-describe('npm start', () => {
-  test('two at once, each in its own folder, never touch each other', async () => {
-    const [one, two] = await Promise.all([start('one'), start('two')]);
+describe('npm start, twice at once', () => {
+  let one: Start;
+  let two: Start;
+  let inesOfOne: Person;
+  let inesOfTwo: Person;
+
+  beforeAll(async () => {
+    [one, two] = await Promise.all([start('one'), start('two')]);
     await Promise.all([one.ready(), two.ready()]);
-    const [inesOfOne, inesOfTwo] = await Promise.all([
+    [inesOfOne, inesOfTwo] = await Promise.all([
       signIn(one.address, one.credentialsOf('Ines')),
       signIn(two.address, two.credentialsOf('Ines')),
     ]);
+  }, 240_000);
+
+  test('each in its own folder, never touch each other', async () => {
     await inesOfOne.call(createVessel, { body: { shopId: inesOfOne.shopId!, name: 'Only in one' } });
 
-    const namesIn = async (person: typeof inesOfOne) =>
-      (await person.call(listVessels, {})).rows.map((vessel) => vessel.name).toSorted();
-    expect(await namesIn(inesOfOne)).toEqual(['Minnow', 'Only in one']);
-    expect(await namesIn(inesOfTwo)).toEqual(['Minnow']);
+    expect(await vesselNamesOf(inesOfOne)).toEqual(['Minnow', 'Only in one']);
+    expect(await vesselNamesOf(inesOfTwo)).toEqual(['Minnow']);
     expect(one.credentialsOf('Ines').password).not.toBe(two.credentialsOf('Ines').password);
     await expect(signIn(two.address, one.credentialsOf('Ines'))).rejects.toThrow('401');
-  }, 120_000);
+  });
+
+  test('secrets are kept where only their owner can read them', () => {
+    for (const file of ['secrets.json', 'demo/sign-ins.json', 'mariadb/instance.json', 'mariadb/init.sql']) {
+      expect(statSync(join(one.folder, file)).mode & 0o077, file).toBe(0);
+    }
+    expect(statSync(one.folder).mode & 0o077).toBe(0);
+  });
 
   test('what was drawn is there again after everything was killed, the demo is not put in twice, and Ctrl-C leaves nothing running', async () => {
-    const first = await start('again');
-    await first.ready();
-    const ines = await signIn(first.address, first.credentialsOf('Ines'));
-    await ines.call(createVessel, { body: { shopId: ines.shopId!, name: 'Kept' } });
-    const database = databasePid('again');
-    await first.end('SIGKILL');
+    await inesOfTwo.call(createVessel, { body: { shopId: inesOfTwo.shopId!, name: 'Kept' } });
+    const database = databasePid('two');
+    await two.end('SIGKILL');
     process.kill(database, 'SIGKILL');
 
-    const second = await start('again', { port: first.port });
+    const second = await start('two', { port: two.port });
     await second.ready();
     const again = await signIn(second.address, second.credentialsOf('Ines'));
-    const { rows } = await again.call(listVessels, {});
-    expect(rows.map((vessel) => vessel.name).toSorted()).toEqual(['Kept', 'Minnow']);
+    expect(await vesselNamesOf(again)).toEqual(['Kept', 'Minnow']);
 
-    const pids = [databasePid('again'), ...second.serverPids()];
+    const pids = [databasePid('two'), ...second.serverPids()];
     expect(pids.length).toBe(2);
     expect(await second.end('SIGINT')).toBe(0);
     for (const pid of pids) expect(isRunning(pid), `process ${pid}`).toBe(false);
+    expect((await fetch(`${one.address}/api/server`)).status, 'the other one').toBe(200);
   }, 120_000);
+});
+
+describe('npm start', () => {
+  afterEach(endAll);
 
   test('a first start that died while it put the demo in is made good by the next', async () => {
     const first = await start('half');
@@ -72,22 +86,17 @@ describe('npm start', () => {
     const second = await start('half');
     await second.ready();
     const ines = await signIn(second.address, second.credentialsOf('Ines'));
-    const { rows } = await ines.call(listVessels, {});
-    expect(rows.map((vessel) => vessel.name)).toEqual(['Minnow']);
+    expect(await vesselNamesOf(ines)).toEqual(['Minnow']);
   }, 120_000);
 
-  test('secrets are kept where only their owner can read them', async () => {
-    const started = await start('secrets');
-    await started.ready();
-    for (const file of ['secrets.json', 'demo/sign-ins.json', 'mariadb/instance.json', 'mariadb/init.sql']) {
-      expect(statSync(join(started.folder, file)).mode & 0o077, file).toBe(0);
-    }
-    expect(statSync(started.folder).mode & 0o077).toBe(0);
-  }, 120_000);
+  describe('with a database of DATABASE_URL', () => {
+    let outside: RunningDatabase;
+    beforeAll(async () => {
+      outside = await startDatabase({ folder: join(trials, 'outside') });
+    });
+    afterAll(() => outside.stop());
 
-  test('a database of DATABASE_URL gets tables and no people, and no mailbox is opened beside it', async () => {
-    const outside = await startDatabase({ folder: join(trials, 'outside') });
-    try {
+    test('it gets tables and no people, no mailbox is opened beside it, and it is left running', async () => {
       const started = await start('with-outside', { env: { DATABASE_URL: outside.url, DEMO: '1' } });
       await started.ready();
       const connection = await mysql.createConnection({ uri: outside.url });
@@ -99,12 +108,18 @@ describe('npm start', () => {
       expect(started.output()).not.toContain('sign-ins');
       expect((await fetch(`${started.address}/api/mailbox`)).status).toBe(404);
       await started.end('SIGTERM');
-      // It was not ours to stop.
       expect(isRunning(outside.pid)).toBe(true);
-    } finally {
-      await outside.stop();
-    }
-  }, 120_000);
+    }, 120_000);
+
+    test('a wrong password is said in one sentence, without the password', async () => {
+      const url = outside.url.replace(outside.password, 'not-this-one');
+      const started = await start('refused', { env: { DATABASE_URL: url } });
+      expect(await started.ended).toBe(1);
+      expect(started.output().trim()).toBe(
+        `The database of DATABASE_URL refuses: 127.0.0.1:${outside.port} does not let "ampwright" in with this password.`,
+      );
+    }, 30_000);
+  });
 
   test('a port in use is said in one sentence, at once', async () => {
     const other = createServer();
@@ -138,27 +153,15 @@ describe('npm start', () => {
     30_000,
   );
 
-  test('a wrong password of the database is said in one sentence, without the password', async () => {
-    const outside = await startDatabase({ folder: join(trials, 'outside') });
-    try {
-      const url = outside.url.replace(outside.password, 'not-this-one');
-      const started = await start('refused', { env: { DATABASE_URL: url } });
-      expect(await started.ended).toBe(1);
-      expect(started.output().trim()).toBe(
-        `The database of DATABASE_URL refuses: 127.0.0.1:${outside.port} does not let "ampwright" in with this password.`,
-      );
-    } finally {
-      await outside.stop();
-    }
-  }, 60_000);
-
   test('a database that can not start says why in one sentence', async () => {
     const folder = join(trials, 'spoilt');
     mkdirSync(join(folder, 'mariadb/data'), { recursive: true });
     writeFileSync(join(folder, 'mariadb/data/ibdata1'), 'not a database');
     const started = await start('spoilt');
     expect(await started.ended).toBe(1);
-    expect(started.output()).toMatch(/^The database in \S+spoilt\/mariadb does not start: .*ibdata1/m);
+    expect(started.output()).toMatch(
+      /^The database in \S+spoilt\/mariadb does not start: InnoDB: File .*was not found/m,
+    );
   }, 60_000);
 });
 
@@ -173,6 +176,15 @@ interface Start {
   serverPids(): number[];
   credentialsOf(firstName: string): Credentials;
   end(signal: NodeJS.Signals): Promise<number | null>;
+}
+
+async function endAll(): Promise<void> {
+  for (const start of running.splice(0)) await start.end('SIGTERM');
+}
+
+async function vesselNamesOf(person: Person): Promise<string[]> {
+  const { rows } = await person.call(listVessels, {});
+  return rows.map((vessel) => vessel.name).toSorted();
 }
 
 /** `npm start` with a data folder, a port and settings of its own. */

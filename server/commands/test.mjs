@@ -46,8 +46,8 @@ const STAGES = [
     ],
     [check('build', [process.execPath, 'server/commands/build.mjs'], 'the client builds'), vitest('unit', 300)],
   ],
-  [[vitest('api', 300)]],
-  [[playwright('e2e', 420)]],
+  [[vitest('api', 600)]],
+  [[playwright('e2e', 600)]],
 ];
 
 const stops = collectStops();
