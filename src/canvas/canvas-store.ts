@@ -6,6 +6,7 @@ import { createStore } from 'zustand/vanilla';
 import type { SheetLayout } from '#shared/layout/sheet-layout.ts';
 import type { EntityId } from '#shared/model/design.ts';
 import type { OpenDesign } from '#src/design/open-design.ts';
+import type { IssueFacts } from '#symbols/sheet/title-fields.ts';
 
 import type { Target } from './hit.ts';
 import { isSameSelection, keepExisting, NOTHING_SELECTED, type Selection } from './selection.ts';
@@ -29,6 +30,8 @@ export interface CanvasState {
   /** Sheet units a pixel of the screen is long. */
   readonly unitsPerPixel: number;
   readonly units: 'us' | 'metric';
+  /** For the title block, beside what the design says. */
+  readonly facts: IssueFacts;
   /** Where to look, each time anew: the canvas flies there. */
   readonly flight: { readonly to: 'fit' | 'selection'; readonly turn: number };
 
@@ -53,6 +56,7 @@ export function createCanvasStore(
     hover: { on: 'nothing' },
     layout: NO_LAYOUT,
     unitsPerPixel: 1,
+    facts: {},
     flight: { to: 'fit', turn: 0 },
 
     happen(happening) {

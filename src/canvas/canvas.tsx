@@ -55,8 +55,6 @@ function Surface({ size }: { readonly size: { width: number; height: number } })
   const open = useOpenDesignStore();
   const sheetId = useCanvas((state) => state.sheetId);
   const selected = useCanvas((state) => state.selection.devices);
-  const toolIs = useCanvas((state) => state.tool.is);
-  const hoverOn = useCanvas((state) => state.hover.on);
   const { design, layout } = useSheetLayout();
   const [nodesOf] = useState(createNodeCache);
   const nodes = useMemo(() => nodesOf(design, sheetId, selected), [nodesOf, design, sheetId, selected]);
@@ -95,13 +93,7 @@ function Surface({ size }: { readonly size: { width: number; height: number } })
   }
 
   return (
-    <div
-      className={`surface tool-${toolIs} over-${hoverOn}`}
-      role="application"
-      aria-label="Sheet"
-      onKeyDown={handleKeyDown}
-      {...handlers}
-    >
+    <div className="surface" role="application" aria-label="Sheet" onKeyDown={handleKeyDown} {...handlers}>
       <ReactFlow
         nodes={nodes}
         nodeTypes={NODE_TYPES}
@@ -126,7 +118,7 @@ function Surface({ size }: { readonly size: { width: number; height: number } })
         }}
         proOptions={PRO_OPTIONS}
       >
-        <FarOrNear />
+        <SurfaceState />
         <ViewportPortal>
           <LowerLayers design={design} sheetId={sheetId} layout={layout} />
           <UpperLayers design={design} sheetId={sheetId} layout={layout} />
@@ -140,12 +132,18 @@ function Surface({ size }: { readonly size: { width: number; height: number } })
 const PAN_BUTTONS = [1];
 const PRO_OPTIONS = { hideAttribution: true };
 
-/** Says on the surface itself how far the sheet is, so that no text subscribes to the zoom. */
-function FarOrNear() {
+/**
+ * Says on the surface itself how far the sheet is, what is in hand and what is under it, so that nothing that is drawn
+ * subscribes to them.
+ */
+function SurfaceState() {
   const isFar = useStore(({ transform }) => transform[2] < FAR_ZOOM);
+  const toolIs = useCanvas((state) => state.tool.is);
+  const hoverOn = useCanvas((state) => state.hover.on);
   const mark = useRef<HTMLSpanElement>(null);
   useLayoutEffect(() => {
-    mark.current?.closest('.surface')?.classList.toggle('is-far', isFar);
+    const surface = mark.current?.closest('.surface');
+    if (surface != null) surface.className = `surface tool-${toolIs} over-${hoverOn}${isFar ? ' is-far' : ''}`;
   });
   return <span ref={mark} hidden />;
 }

@@ -9,6 +9,8 @@ import { isWithin } from './hit.ts';
 export interface FindingFlag {
   readonly number: number;
   readonly findingId: string;
+  /** The device or run it speaks of. */
+  readonly subject: EntityId;
   readonly severity: Severity;
   readonly at: Point;
   readonly dot: Point;
@@ -55,6 +57,7 @@ export function placeFlags(
     flags.push({
       number: index + 1,
       findingId: finding.id,
+      subject,
       severity: finding.severity,
       at,
       dot,

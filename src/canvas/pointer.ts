@@ -6,7 +6,7 @@ import type { OpenDesign } from '#src/design/open-design.ts';
 
 import { worldOf, type CanvasState, type View } from './canvas-store.ts';
 import { hitAt, type Target } from './hit.ts';
-import { DRAG_PIXELS } from './tools/tool.ts';
+import { DRAG_PIXELS, type Tool } from './tools/tool.ts';
 
 interface PointerOptions {
   readonly canvas: StoreApi<CanvasState>;
@@ -15,6 +15,10 @@ interface PointerOptions {
   /** Space is down: the hand pans. */
   readonly isPanning: () => boolean;
 }
+
+const NOTHING: Target = { on: 'nothing' };
+/** Tools that have something in hand do not ask what lies under it. */
+const ASKS_NOT: ReadonlySet<Tool['is']> = new Set(['dragging-devices', 'dragging-bend', 'marquee', 'placing']);
 
 /** The browser's pointer told to the tools in sheet units. A finger pans and pinches; only its tap is told. */
 export function pointerHandlers({ canvas, open, view, isPanning }: PointerOptions) {
@@ -27,7 +31,8 @@ export function pointerHandlers({ canvas, open, view, isPanning }: PointerOption
     const at = { x: (event.clientX - frame.left - x) / zoom, y: (event.clientY - frame.top - y) / zoom };
     const state = canvas.getState();
     if (state.unitsPerPixel !== 1 / zoom) canvas.setState({ unitsPerPixel: 1 / zoom });
-    return { at, over: hitAt(worldOf(canvas.getState(), open.getState()), at), shift: event.shiftKey };
+    const over = ASKS_NOT.has(state.tool.is) ? NOTHING : hitAt(worldOf(canvas.getState(), open.getState()), at);
+    return { at, over, shift: event.shiftKey };
   }
 
   return {

@@ -1,8 +1,8 @@
-import { memo, useMemo, type ReactNode } from 'react';
+import { memo, useMemo, useState, type ComponentType, type ReactNode } from 'react';
 
 import { paperSize } from '#shared/layout/paper.ts';
-import { runColour } from '#shared/layout/run-colour.ts';
 import type { RunLayout, SheetLayout } from '#shared/layout/sheet-layout.ts';
+import type { Finding } from '#shared/model/analysis.ts';
 import type { Basis, Design, EntityId, Note, Run, Sheet, Zone } from '#shared/model/design.ts';
 import { useOpenDesign } from '#src/design/open-design.ts';
 import { screenInk } from '#symbols/ink.ts';
@@ -20,8 +20,9 @@ import { ZoneOutline } from '#symbols/sheet/zone-outline.tsx';
 import { useCanvas } from './canvas-store.ts';
 import { isSeen, useSeenCells } from './culling.ts';
 import { DraftLayer } from './draft-layer.tsx';
-import { placeFlags } from './finding-flags.ts';
+import { placeFlags, type FindingFlag } from './finding-flags.ts';
 import { FlagLayer } from './flag-layer.tsx';
+import type { Selection } from './selection.ts';
 import { HoverMarks, SelectionMarks, Sleeves } from './selection-layer.tsx';
 
 interface LayerProps {
@@ -57,11 +58,7 @@ export function UpperLayers({ design, sheetId, layout }: LayerProps) {
   const mayEdit = useOpenDesign((open) => open.mayEdit);
   const findings = useOpenDesign((open) => open.analysis?.findings);
   const isDragging = tool.is === 'dragging-devices' || tool.is === 'dragging-bend';
-  // Flags go to their places when the hand lets go; while it drags they would jump.
-  const flags = useMemo(
-    () => (isDragging || findings === undefined ? [] : placeFlags(design, sheetId, layout, findings)),
-    [isDragging, findings, design, sheetId, layout],
-  );
+  const flags = useFlags(isDragging, { design, sheetId, layout, findings, selection });
   const hovered = tool.is === 'idle' ? hover : null;
   return (
     <svg className="sheet-layer upper" width={1} height={1}>
@@ -77,6 +74,34 @@ export function UpperLayers({ design, sheetId, layout }: LayerProps) {
     </svg>
   );
 }
+
+/** While something is dragged the flags of all else stay; its own come back where it is let go. */
+function useFlags(
+  isDragging: boolean,
+  {
+    design,
+    sheetId,
+    layout,
+    findings,
+    selection,
+  }: LayerProps & { readonly findings: readonly Finding[] | undefined; readonly selection: Selection },
+): readonly FindingFlag[] {
+  const [held, setHeld] = useState<readonly FindingFlag[]>(NO_FLAGS);
+  const flags = useMemo(
+    () => (isDragging || findings === undefined ? NO_FLAGS : placeFlags(design, sheetId, layout, findings)),
+    [isDragging, findings, design, sheetId, layout],
+  );
+  if (!isDragging && held !== flags) setHeld(flags);
+  return useMemo(
+    () =>
+      isDragging
+        ? held.filter(({ subject }) => !selection.devices.has(subject) && !selection.runs.has(subject))
+        : flags,
+    [isDragging, held, flags, selection],
+  );
+}
+
+const NO_FLAGS: readonly FindingFlag[] = [];
 
 const Paper = memo(function Paper({ sheet }: { readonly sheet: Sheet }) {
   const { width, height } = paperSize(sheet);
@@ -98,7 +123,8 @@ function Ground({ design, sheet }: { readonly design: Design; readonly sheet: Sh
   const analysis = useOpenDesign((open) => open.analysis);
   const inReview =
     analysis?.findings.some((finding) => finding.severity === 'must' && finding.accepted !== true) ?? false;
-  const fields = useMemo(() => titleFieldsOf(design, sheet.id), [design, sheet]);
+  const facts = useCanvas((canvas) => canvas.facts);
+  const fields = useMemo(() => titleFieldsOf(design, sheet.id, facts), [design, sheet.id, facts]);
   return (
     <>
       <Zones zones={design.zones} sheetId={sheet.id} basis={design.basis} />
@@ -148,41 +174,92 @@ function Runs({
   const seen = useSeenCells();
   const selected = useCanvas((canvas) => canvas.selection.runs);
   const inView = useMemo(() => {
-    const drawn: { run: Run; drawn: RunLayout; colour: string }[] = [];
+    const drawn: DrawnRun[] = [];
     for (const run of Object.values(design.runs)) {
       const place = layout.runs[run.id];
       if (place === undefined || place.points.length === 0 || !isSeen(place, seen)) continue;
-      drawn.push({ run, drawn: place, colour: runColour(design, run) });
+      drawn.push({ run, drawn: place });
     }
     return drawn;
-  }, [design, layout, seen]);
+  }, [design.runs, layout, seen]);
+  const bundles = bundle(inView);
   return (
     <>
-      {inView.map(({ run, drawn }) => (
-        <RunOutline key={run.id} run={run} layout={drawn} ink={screenInk} />
-      ))}
+      <Bundles of={Outlines} bundles={bundles} />
       {sleeves}
-      {selected.size > 0 &&
-        inView
-          .filter(({ run }) => selected.has(run.id))
-          .map(({ run, drawn }) => <RunOutline key={run.id} run={run} layout={drawn} ink={screenInk} />)}
-      {inView.map(({ run, drawn, colour }) => (
-        <RunCore key={run.id} run={run} layout={drawn} colour={colour} ink={screenInk} />
-      ))}
-      {inView.map(({ run, drawn, colour }) => (
-        <RunHops key={run.id} run={run} layout={drawn} colour={colour} ink={screenInk} />
-      ))}
-      {inView.map(({ drawn }) =>
-        drawn.stubs.map((stub) => <Stub key={`${drawn.runId} ${stub.text}`} stub={stub} ink={screenInk} />),
-      )}
-      {inView.map(({ run, drawn }) =>
-        drawn.label === null || selected.has(run.id) ? null : (
-          <RunLabel key={run.id} label={drawn.label} ink={screenInk} />
-        ),
-      )}
+      {selected.size > 0 && <Outlines runs={inView.filter(({ run }) => selected.has(run.id))} />}
+      <Bundles of={Cores} bundles={bundles} />
+      <Bundles of={Hops} bundles={bundles} />
+      <Bundles of={Stubs} bundles={bundles} />
+      <Bundles of={Labels} bundles={bundles} selected={selected} />
     </>
   );
 }
+
+interface DrawnRun {
+  readonly run: Run;
+  readonly drawn: RunLayout;
+}
+interface BundleProps {
+  readonly runs: readonly DrawnRun[];
+  readonly selected?: ReadonlySet<EntityId>;
+}
+
+/** Few enough that one moved run has few others looked at, and many enough that the bundles themselves cost nothing. */
+const BUNDLE = 24;
+
+function bundle(runs: readonly DrawnRun[]): DrawnRun[][] {
+  return Array.from({ length: Math.ceil(runs.length / BUNDLE) }, (_, i) => runs.slice(i * BUNDLE, (i + 1) * BUNDLE));
+}
+
+function Bundles({
+  of: Bundle,
+  bundles,
+  selected,
+}: {
+  readonly of: ComponentType<BundleProps>;
+  readonly bundles: readonly (readonly DrawnRun[])[];
+  readonly selected?: ReadonlySet<EntityId>;
+}) {
+  return bundles.map((runs, i) => <Bundle key={i} runs={runs} selected={selected} />);
+}
+
+/** Drawn again only when one of its runs moved or changed. */
+function memoBundle(Bundle: (props: BundleProps) => ReactNode) {
+  return memo(
+    Bundle,
+    (before, after) =>
+      before.selected === after.selected &&
+      before.runs.length === after.runs.length &&
+      before.runs.every(({ run, drawn }, i) => run === after.runs[i]!.run && drawn === after.runs[i]!.drawn),
+  );
+}
+
+const Outlines = memoBundle(({ runs }) =>
+  runs.map(({ run, drawn }) => <RunOutline key={run.id} run={run} layout={drawn} ink={screenInk} />),
+);
+
+const Cores = memoBundle(({ runs }) =>
+  runs.map(({ run, drawn }) => <RunCore key={run.id} run={run} layout={drawn} colour={drawn.colour} ink={screenInk} />),
+);
+
+const Hops = memoBundle(({ runs }) =>
+  runs.map(({ run, drawn }) => <RunHops key={run.id} run={run} layout={drawn} colour={drawn.colour} ink={screenInk} />),
+);
+
+const Stubs = memoBundle(({ runs }) =>
+  runs.flatMap(({ drawn }) =>
+    drawn.stubs.map((stub) => <Stub key={`${drawn.runId} ${stub.text}`} stub={stub} ink={screenInk} />),
+  ),
+);
+
+const Labels = memoBundle(({ runs, selected }) =>
+  runs.map(({ run, drawn }) =>
+    drawn.label === null || selected?.has(run.id) ? null : (
+      <RunLabel key={run.id} label={drawn.label} ink={screenInk} />
+    ),
+  ),
+);
 
 const Tags = memo(function Tags({ design, sheetId, layout }: LayerProps) {
   const selected = useCanvas((canvas) => canvas.selection.devices);

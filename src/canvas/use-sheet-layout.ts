@@ -1,7 +1,6 @@
-import { useEffect, useMemo, useRef } from 'react';
+import { useEffect, useMemo, useState } from 'react';
 
 import { withFamily } from '#shared/edits/family.ts';
-import { layoutSheet } from '#shared/layout/layout-sheet.ts';
 import { routeRuns } from '#shared/layout/route-runs.ts';
 import type { SheetLayout } from '#shared/layout/sheet-layout.ts';
 import type { Design, EntityId } from '#shared/model/design.ts';
@@ -10,6 +9,7 @@ import { useOpenDesign } from '#src/design/open-design.ts';
 import { useCanvas, useCanvasStore } from './canvas-store.ts';
 import { previewDesign } from './preview.ts';
 import type { Selection } from './selection.ts';
+import { createSheetLayouts } from './sheet-layouts.ts';
 import type { Tool } from './tools/tool.ts';
 
 /** The sheet as it is drawn now: at rest the whole layout, while something is dragged only its runs laid anew. */
@@ -25,38 +25,39 @@ export function useSheetLayout(): { readonly design: Design; readonly layout: Sh
     store.setState({ layout: rest });
   }, [store, rest]);
 
+  // Where the hand is does not change what it holds.
+  // eslint-disable-next-line react-hooks/exhaustive-deps
+  const held = useMemo(() => holdInHand(design, dragging, selection), [design, dragging?.is, selection]);
   return useMemo(() => {
     if (dragging === null) return { design, layout: rest };
     const preview = previewDesign(design, dragging, selection);
     if (preview === design) return { design, layout: rest };
-    return { design: preview, layout: routeRuns(preview, sheetId, runsInHand(design, dragging, selection), rest) };
-  }, [design, sheetId, rest, dragging, selection]);
+    const tags = Object.fromEntries(Object.entries(rest.tags).filter(([id]) => !held.devices.has(id)));
+    return { design: preview, layout: routeRuns(preview, sheetId, held.runs, { runs: rest.runs, tags }) };
+  }, [design, sheetId, rest, dragging, selection, held]);
 }
 
-/** Laid with the last layout of the sheet beside it, so that what did not move stays the same object. */
+/** What did not move stays where it lies, and stays the same object. */
 function useRestLayout(design: Design, sheetId: EntityId): SheetLayout {
-  const last = useRef<{ readonly sheetId: EntityId; readonly layout: SheetLayout } | null>(null);
-  const { sheets, devices, runs, zones, notes, basis } = design;
-  const layout = useMemo(
-    () => layoutSheet(design, sheetId, last.current?.sheetId === sheetId ? last.current.layout : undefined),
-    // What the layout does not read does not lay it anew.
-    // eslint-disable-next-line react-hooks/exhaustive-deps
-    [sheetId, sheets, devices, runs, zones, notes, basis],
-  );
+  const [turn, setTurn] = useState(0);
+  const [layouts] = useState(() => createSheetLayouts(() => setTurn((last) => last + 1)));
   useEffect(() => {
-    last.current = { sheetId, layout };
-  }, [sheetId, layout]);
-  return layout;
+    layouts.resume();
+    return () => layouts.stop();
+  }, [layouts]);
+  // A turn is a layout that has come in.
+  // eslint-disable-next-line react-hooks/exhaustive-deps
+  return useMemo(() => layouts.layoutOf(design, sheetId), [layouts, design, sheetId, turn]);
 }
 
 function isDragging(tool: Tool): boolean {
   return tool.is === 'dragging-devices' || tool.is === 'dragging-bend';
 }
 
-function runsInHand(design: Design, tool: Tool, selection: Selection): EntityId[] {
-  if (tool.is === 'dragging-bend') return [tool.run];
-  const moved = new Set(withFamily(design, [...selection.devices]));
-  return Object.values(design.runs)
-    .filter((run) => moved.has(run.from.device) || moved.has(run.to.device))
-    .map((run) => run.id);
+/** The devices that go with the hand, and the runs that must be laid anew for it. */
+function holdInHand(design: Design, tool: Tool | null, selection: Selection) {
+  if (tool?.is === 'dragging-bend') return { devices: new Set<EntityId>(), runs: [tool.run] };
+  const devices = new Set(tool === null ? [] : withFamily(design, [...selection.devices]));
+  const runs = Object.values(design.runs).filter((run) => devices.has(run.from.device) || devices.has(run.to.device));
+  return { devices, runs: runs.map(({ id }) => id) };
 }

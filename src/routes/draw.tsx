@@ -1,4 +1,5 @@
-import { useEffect, useState } from 'react';
+import { useQuery } from '@tanstack/react-query';
+import { useEffect, useMemo, useState } from 'react';
 import { useParams, useSearchParams } from 'react-router';
 
 import { basisOf, sheetOf } from '#shared/model/defaults.ts';
@@ -7,9 +8,12 @@ import { CanvasContext, createCanvasStore, useCanvas, useCanvasStore } from '#sr
 import { readSelection, writeSelection } from '#src/canvas/selection.ts';
 import { useOpenDesign, useOpenDesignStore } from '#src/design/open-design.ts';
 import { DrawScreen } from '#src/features/draw/draw-screen.tsx';
+import { revisionsQuery } from '#src/features/revisions/revisions-api.ts';
 import { useUnits } from '#src/lib/reader-settings.ts';
+import type { IssueFacts } from '#symbols/sheet/title-fields.ts';
 
 import { usePageTitle } from './page-title.ts';
+import { useVesselContext } from './vessel-layout.tsx';
 
 /** `/vessels/:vesselId/draw?sheet=1&select=W12`: the sheet and the selection stand in the address. */
 export function DrawRoute() {
@@ -30,12 +34,32 @@ export function DrawRoute() {
     canvas.setState({ units });
   }, [canvas, units]);
 
+  const facts = useIssueFacts();
+  useEffect(() => {
+    canvas.setState({ facts });
+  }, [canvas, facts]);
+
   return (
     <CanvasContext value={canvas}>
       <Address />
       <DrawScreen />
     </CanvasContext>
   );
+}
+
+/** What stands in the title block beside the design: as it would be printed now. */
+function useIssueFacts(): IssueFacts {
+  const { me, vessel } = useVesselContext();
+  const seq = useOpenDesign((open) => open.seq);
+  const revisions = useQuery(revisionsQuery(vessel.vesselId)).data;
+  const latest = revisions?.toSorted((a, b) => b.issuedAt.localeCompare(a.issuedAt))[0];
+  const isAsIssued = latest?.seq === seq;
+  const [created, legalOwner] = [me.name, vessel.shopName];
+  return useMemo(() => {
+    if (latest === undefined) return { legalOwner, created };
+    if (!isAsIssued) return { legalOwner, created, revision: `${latest.letter} +` };
+    return { legalOwner, created, revision: latest.letter, issued: latest.issuedAt.slice(0, 10) };
+  }, [legalOwner, created, latest, isAsIssued]);
 }
 
 /** Keeps the address, the selection and the design in step. */

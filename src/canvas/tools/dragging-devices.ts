@@ -1,6 +1,6 @@
 import type { Point } from '#shared/kinds/place.ts';
 import { moveDevices } from '#shared/edits/move-devices.ts';
-import { minus, snap } from '#src/canvas/grid.ts';
+import { isSamePoint, minus, snap } from '#src/canvas/grid.ts';
 
 import { IDLE, isEscape, type Happening, type Outcome, type Tool, type World } from './tool.ts';
 
@@ -8,7 +8,10 @@ type Dragging = Extract<Tool, { is: 'dragging-devices' }>;
 
 /** Selected devices follow the hand on the grid; the design hears of it on release. */
 export function onDraggingDevices(tool: Dragging, happening: Happening, world: World): Outcome {
-  if (happening.type === 'move') return { tool: { ...tool, by: draggedBy(tool.start, happening.at) } };
+  if (happening.type === 'move') {
+    const by = draggedBy(tool.start, happening.at);
+    return { tool: isSamePoint(by, tool.by) ? tool : { ...tool, by } };
+  }
   if (happening.type === 'up') {
     const by = draggedBy(tool.start, happening.at);
     if (by.x === 0 && by.y === 0) return { tool: IDLE };

@@ -107,33 +107,36 @@ function ItemList({ items, onArm }: { readonly items: readonly Item[]; readonly 
   );
 }
 
-/** At true size; what is wider than its place, a long busbar, is drawn smaller. */
+/** At true size where it fits its row; what is larger, a long busbar or a battery, is drawn smaller. */
 function ItemSymbol({ armed }: { readonly armed: Armed }) {
-  if (armed.what === 'fuse-panel') {
-    return (
-      <svg viewBox="0 0 60 32" width={60} height={32} aria-hidden="true">
-        <path d="M2 6H58" stroke="var(--ink-1)" strokeWidth={6} />
-        <path
-          d="M10 6V28M20 6V28M30 6V28M40 6V28M50 6V28M7 12h6v10h-6ZM17 12h6v10h-6ZM27 12h6v10h-6ZM37 12h6v10h-6ZM47 12h6v10h-6Z"
-          fill="none"
-          stroke="var(--ink-1)"
-          strokeWidth={1.2}
-        />
-      </svg>
-    );
-  }
-  const device = ghostOf(armed.partId);
-  const { width, height } = boxOf(device);
-  const scale = Math.min(1, 56 / width);
+  const box = armed.what === 'fuse-panel' ? { width: PANEL.width, height: PANEL.height } : boxOf(ghostOf(armed.partId));
+  const scale = Math.max(1, box.width / (ROOM.width - 4), box.height / (ROOM.height - 4));
+  const [width, height] = [ROOM.width * scale, ROOM.height * scale];
   return (
     <svg
-      viewBox={`${-(60 / scale - width) / 2} -2 ${60 / scale} ${height + 4}`}
-      width={60}
-      height={(height + 4) * scale}
+      viewBox={`${(box.width - width) / 2} ${(box.height - height) / 2} ${width} ${height}`}
+      width={ROOM.width}
+      height={ROOM.height}
       aria-hidden="true"
     >
-      <DeviceSymbol device={device} ink={screenInk} />
+      {armed.what === 'fuse-panel' ? <PanelSymbol /> : <DeviceSymbol device={ghostOf(armed.partId)} ink={screenInk} />}
     </svg>
+  );
+}
+
+/** What a symbol has in its row. */
+const ROOM = { width: 60, height: 34 };
+const PANEL = { width: 56, height: 26 };
+
+function PanelSymbol() {
+  return (
+    <g fill="none" stroke="var(--ink-1)">
+      <path d="M0 3H56" strokeWidth={6} />
+      <path
+        d="M8 3V26M18 3V26M28 3V26M38 3V26M48 3V26M5 10h6v10h-6ZM15 10h6v10h-6ZM25 10h6v10h-6ZM35 10h6v10h-6ZM45 10h6v10h-6Z"
+        strokeWidth={1.2}
+      />
+    </g>
   );
 }
 
