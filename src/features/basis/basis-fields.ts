@@ -14,7 +14,7 @@ export interface BasisField {
   readonly of: (basis: FullBasis) => unknown;
   readonly choices?: readonly Choice[];
   /** Choices are kept as text; this makes the document's value of one. */
-  readonly valueOf?: (chosen: string) => unknown;
+  readonly readChoice?: (chosen: string) => unknown;
   readonly print?: (value: unknown, units: UnitSystem) => string;
   readonly read?: (text: string, units: UnitSystem) => Reading<unknown>;
 }
@@ -125,7 +125,7 @@ export const BASIS_GROUPS: readonly BasisGroup[] = [
         says: 'What new runs are drawn with.',
         of: (basis) => basis.cable.insulationC,
         choices: INSULATION_TEMPERATURES.map((c) => ({ value: String(c), title: `${c} °C` })),
-        valueOf: Number,
+        readChoice: Number,
       },
       {
         ...share(
@@ -175,7 +175,7 @@ export const BASIS_GROUPS: readonly BasisGroup[] = [
           { value: 'true', title: 'polarized' },
           { value: 'false', title: 'not polarized' },
         ],
-        valueOf: (chosen) => chosen === 'true',
+        readChoice: (chosen) => chosen === 'true',
       },
     ],
   },

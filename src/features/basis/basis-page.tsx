@@ -87,7 +87,7 @@ function Field({ field }: { readonly field: BasisField }) {
         value={String(value)}
         choices={field.choices}
         isDefault={isDefault}
-        onPick={(chosen) => change(field.valueOf?.(chosen) ?? chosen)}
+        onPick={(chosen) => change(field.readChoice === undefined ? chosen : field.readChoice(chosen))}
         hint={hint}
       />
     );

@@ -22,8 +22,10 @@ export function IssueRevision({ vesselId, primary }: { readonly vesselId: string
         aria-label={`Issue revision ${letter}`}
         onClick={() => setIsOpen(true)}
       >
-        Issue <span className="desk-only">revision </span>
-        {letter}
+        <span>
+          Issue <span className="desk-only">revision </span>
+          {letter}
+        </span>
       </Button>
       {isOpen && <IssueDialog vesselId={vesselId} letter={letter} onClose={() => setIsOpen(false)} />}
     </>
