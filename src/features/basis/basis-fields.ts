@@ -214,6 +214,11 @@ export const BASIS_GROUPS: readonly BasisGroup[] = [
   },
 ];
 
+/** What the document keeps for a choice. */
+export function readChoiceOf(field: BasisField, chosen: string): unknown {
+  return field.readChoice === undefined ? chosen : field.readChoice(chosen);
+}
+
 type Path = readonly [string, ...string[]];
 
 function temperature(path: Path, caption: string, says: string, of: BasisField['of']): BasisField {

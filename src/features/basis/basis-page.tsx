@@ -6,7 +6,7 @@ import { useUnits } from '#src/lib/reader-settings.ts';
 import { Button } from '#src/ui/button.tsx';
 import { Cell, EditCell, PickCell } from '#src/ui/cell.tsx';
 
-import { BASIS_GROUPS, type BasisField } from './basis-fields.ts';
+import { BASIS_GROUPS, readChoiceOf, type BasisField } from './basis-fields.ts';
 import { VesselFacts } from './vessel-facts.tsx';
 import { ZoneList } from './zone-list.tsx';
 
@@ -87,7 +87,7 @@ function Field({ field }: { readonly field: BasisField }) {
         value={String(value)}
         choices={field.choices}
         isDefault={isDefault}
-        onPick={(chosen) => change(field.readChoice === undefined ? chosen : field.readChoice(chosen))}
+        onPick={(chosen) => change(readChoiceOf(field, chosen))}
         hint={hint}
       />
     );
