@@ -61,6 +61,19 @@ export function defineKind<Ratings extends z.ZodObject>(kind: Kind<Ratings>): Ki
 
 /** The ratings of a device read by its kind's schema; what does not fit is left out, so that a bad design never throws. */
 export function readRatings<Ratings extends z.ZodObject>(schema: Ratings, device: Device): Partial<z.infer<Ratings>> {
+  const { ratings } = device;
+  if (typeof ratings !== 'object' || ratings === null) return parseRatings(schema, device);
+  const before = known.get(ratings);
+  if (before && before.schema === schema) return before.read as Partial<z.infer<Ratings>>;
+  const read = parseRatings(schema, device);
+  known.set(ratings, { schema, read });
+  return read;
+}
+
+/** Asked for in every mode, and slow beside all else; the objects of a document never change. */
+const known = new WeakMap<object, { readonly schema: z.ZodObject; readonly read: object }>();
+
+function parseRatings<Ratings extends z.ZodObject>(schema: Ratings, device: Device): Partial<z.infer<Ratings>> {
   const whole = schema.safeParse(device.ratings);
   if (whole.success) return whole.data as Partial<z.infer<Ratings>>;
   const shape = schema.shape as Record<string, z.ZodType>;

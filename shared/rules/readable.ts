@@ -1,4 +1,6 @@
-import { WORK, type Design, type Device, type Run } from '#shared/model/design.ts';
+import type { z } from 'zod';
+
+import { Basis, WORK, type Design, type Device, type Run } from '#shared/model/design.ts';
 import { INSULATION_TEMPERATURES, sizeOf } from '#shared/model/size.ts';
 
 /**
@@ -12,15 +14,30 @@ export function readable(design: Design): Design {
     ...given,
     format: 'ampwright-design',
     version: 1,
-    basis: isRecord(given.basis) ? withFiniteNumbers(given.basis) : {},
+    basis: isRecord(given.basis) ? readableBasis(given.basis) : {},
     sheets: only(given.sheets, isRecord),
     zones: mapped(only(given.zones, isRecord), withFiniteNumbers),
     devices,
     runs: mapped(only(given.runs, isRun), tidyRun),
-    modes: only(given.modes, isRecord),
+    modes: mapped(only(given.modes, isRecord), withHours),
     notes: only(given.notes, isRecord),
     accepted: isRecord(given.accepted) ? given.accepted : {},
   } as Design;
+}
+
+/** Each part of the basis by its own schema; what does not fit falls back to its default. */
+function readableBasis(basis: object): object {
+  if (Basis.safeParse(basis).success) return basis;
+  const shape = Basis.shape as Record<string, z.ZodType>;
+  return Object.fromEntries(
+    Object.entries(basis).filter(([key, value]) => Object.hasOwn(shape, key) && shape[key]!.safeParse(value).success),
+  );
+}
+
+function withHours<T extends object>(mode: T): T {
+  const { hoursPerDay } = mode as { hoursPerDay?: unknown };
+  const isSound = typeof hoursPerDay === 'number' && hoursPerDay >= 0 && hoursPerDay <= 24;
+  return isSound ? mode : { ...mode, hoursPerDay: 0 };
 }
 
 function isRecord(value: unknown): value is Record<string, unknown> {
