@@ -99,7 +99,7 @@ function MiniPath({ vessel }: { readonly vessel: VesselSummary }) {
   const isIssued = vessel.revision !== null;
   const isDrawn = (vessel.drawn?.runs ?? 0) > 0;
   return (
-    <nav className="mini" aria-label={`Path of ${vessel.name}`}>
+    <div className="mini" role="group" aria-label={`Path of ${vessel.name}`}>
       {STEPS.map((step) => (
         <Link key={step} to={`/vessels/${vessel.vesselId}/${step}`}>
           <span>{step[0]!.toUpperCase() + step.slice(1)}</span>
@@ -108,7 +108,7 @@ function MiniPath({ vessel }: { readonly vessel: VesselSummary }) {
           </i>
         </Link>
       ))}
-    </nav>
+    </div>
   );
 }
 
