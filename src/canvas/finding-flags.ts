@@ -34,14 +34,18 @@ const PLACES: readonly Point[] = [
   { x: 0, y: 44 },
 ];
 
-/** One flag a subject on this sheet, for its gravest finding; each stands free of everything else, where there is room. */
+/**
+ * One flag a subject on this sheet, for its gravest finding, and one a rule on an assembly, however many of its parts it
+ * speaks of; each stands free of everything else, where there is room.
+ */
 export function placeFlags(
   design: Design,
   sheetId: EntityId,
   layout: SheetLayout,
   findings: readonly Finding[],
 ): FindingFlag[] {
-  const taken = obstaclesOf(design, sheetId, layout);
+  if (findings.length === 0) return [];
+  const taken = createRoom(obstaclesOf(design, sheetId, layout));
   const flags: FindingFlag[] = [];
   const spoken = new Set<string>();
   findings.forEach((finding, index) => {
@@ -49,11 +53,14 @@ export function placeFlags(
     const { device: deviceId, run: runId } = finding.subject;
     const subject = deviceId ?? runId;
     if (subject === undefined || spoken.has(subject)) return;
+    const parent = deviceId === undefined ? undefined : design.devices[deviceId]?.parent;
+    const ofAssembly = `${finding.rule} ${parent}`;
+    if (parent !== undefined && spoken.has(ofAssembly)) return;
     const dots = deviceId === undefined ? dotsOnRun(layout, runId!) : dotsOnDevice(design, sheetId, deviceId);
     if (dots.length === 0) return;
-    spoken.add(subject);
+    spoken.add(subject).add(ofAssembly);
     const { at, dot } = findRoom(dots, taken);
-    taken.push({ x: at.x - RADIUS, y: at.y - RADIUS, width: 2 * RADIUS, height: 2 * RADIUS });
+    taken.add({ x: at.x - RADIUS, y: at.y - RADIUS, width: 2 * RADIUS, height: 2 * RADIUS });
     flags.push({
       number: index + 1,
       findingId: finding.id,
@@ -67,15 +74,46 @@ export function placeFlags(
   return flags;
 }
 
-function findRoom(dots: readonly Point[], taken: readonly Box[]): { at: Point; dot: Point } {
+function findRoom(dots: readonly Point[], taken: Room): { at: Point; dot: Point } {
   for (const place of PLACES) {
     for (const dot of dots) {
       const at = { x: dot.x + place.x, y: dot.y + place.y };
-      if (!taken.some((box) => isWithin(box, at, RADIUS + 3))) return { at, dot };
+      if (taken.isFree(at)) return { at, dot };
     }
   }
   const dot = dots[0]!;
   return { at: { x: dot.x + PLACES[0]!.x, y: dot.y + PLACES[0]!.y }, dot };
+}
+
+/** What is taken, by squares of the sheet, so that asking for a place does not walk the whole of it. */
+interface Room {
+  add(box: Box): void;
+  isFree(at: Point): boolean;
+}
+
+const SQUARE = 64;
+
+function createRoom(boxes: readonly Box[]): Room {
+  const squares = new Map<string, Box[]>();
+  const reach = RADIUS + 3;
+  const room: Room = {
+    add(box) {
+      const [right, bottom] = [box.x + box.width + reach, box.y + box.height + reach];
+      for (let i = Math.floor((box.x - reach) / SQUARE); i <= Math.floor(right / SQUARE); i++) {
+        for (let j = Math.floor((box.y - reach) / SQUARE); j <= Math.floor(bottom / SQUARE); j++) {
+          const here = squares.get(`${i} ${j}`);
+          if (here === undefined) squares.set(`${i} ${j}`, [box]);
+          else here.push(box);
+        }
+      }
+    },
+    isFree(at) {
+      const here = squares.get(`${Math.floor(at.x / SQUARE)} ${Math.floor(at.y / SQUARE)}`) ?? [];
+      return !here.some((box) => isWithin(box, at, reach));
+    },
+  };
+  for (const box of boxes) room.add(box);
+  return room;
 }
 
 function dotsOnRun(layout: SheetLayout, runId: EntityId): Point[] {
