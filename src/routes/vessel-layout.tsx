@@ -64,6 +64,7 @@ function VesselFrame({ me, vessel, isDrawing }: VesselContext & { readonly isDra
       <VesselHead
         vessel={vessel}
         myName={me.name}
+        heading={isDrawing ? `Drawing of ${vessel.name}` : undefined}
         action={may(vessel.role, 'issue-revision') && <IssueRevision vesselId={vessel.vesselId} primary={isDrawing} />}
       />
       <Outlet context={{ me, vessel } satisfies VesselContext} />

@@ -17,10 +17,13 @@ import { VesselMenu } from './vessel-menu.tsx';
 export function VesselHead({
   vessel,
   myName,
+  heading,
   action,
 }: {
   readonly vessel: VesselSummary;
   readonly myName: string;
+  /** What the screen is, read out where the screen itself shows no heading: the drawing. */
+  readonly heading?: string;
   /** The screen's own button at the right: issuing a revision. */
   readonly action?: ReactNode;
 }) {
@@ -29,6 +32,7 @@ export function VesselHead({
   return (
     <>
       <header className="head">
+        {heading !== undefined && <h1 className="visually-hidden">{heading}</h1>}
         <Link className="home" to="/" title="All vessels">
           <Mark label="Ampwright, all vessels" />
           <div>
