@@ -17,8 +17,9 @@ async function main(): Promise<void> {
 async function run(configuration: Configuration): Promise<void> {
   await migrateDatabase(configuration.databaseUrl);
   if (configuration.demo !== undefined) await seed(configuration.databaseUrl, configuration.demo);
-  const sources = configuration.mode === 'development' ? await serveClientSources() : undefined;
+  const sources = configuration.mode === 'development' ? serveClientSources() : undefined;
   const running = await startHouse(configuration, { client: sources?.middleware });
+  await sources?.open(running.server);
 
   let stopping = false;
   const stop = () => {
@@ -26,9 +27,9 @@ async function run(configuration: Configuration): Promise<void> {
     stopping = true;
     // Nothing may keep the process: what was acknowledged is committed already.
     setTimeout(() => process.exit(1), 8_000).unref();
-    void running
-      .stop()
-      .then(() => sources?.close())
+    // Sources first: the server can not close while a page still listens for changes of them.
+    void Promise.resolve(sources?.close())
+      .then(() => running.stop())
       .finally(() => process.exit(0));
   };
   process.on('SIGTERM', stop);

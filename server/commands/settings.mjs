@@ -3,7 +3,7 @@ import { join } from 'node:path';
 import { ROOT } from './run.mjs';
 import { Stopped } from './stopped.mjs';
 
-/** What the environment says about a local start. The server checks all else itself (server/settings). */
+/** What the environment says about a local start. The server checks all else itself (server/http/configuration.ts). */
 export function readStartSettings(env = process.env) {
   const port = Number(env.PORT || 4310);
   if (!Number.isInteger(port) || port < 1 || port > 65_535) {

@@ -1,7 +1,9 @@
 import { existsSync } from 'node:fs';
+import type { Server } from 'node:http';
 import { fileURLToPath } from 'node:url';
 
 import express, { Router, type RequestHandler } from 'express';
+import type { ViteDevServer } from 'vite';
 
 const DIST = fileURLToPath(new URL('../../dist', import.meta.url));
 
@@ -23,9 +25,29 @@ export function serveBuiltClient(): Router {
   return router;
 }
 
-/** The client from its sources, with hot reload. Vite is loaded only here: a server in production never needs it. */
-export async function serveClientSources(): Promise<{ middleware: RequestHandler; close(): Promise<void> }> {
-  const { createServer } = await import('vite');
-  const vite = await createServer({ server: { middlewareMode: true }, appType: 'spa' });
-  return { middleware: vite.middlewares, close: () => vite.close() };
+export interface ClientSources {
+  readonly middleware: RequestHandler;
+  open(server: Server): Promise<void>;
+  close(): Promise<void>;
+}
+
+/**
+ * The client from its sources, with hot reload over the server's own port, so that two at once never meet.
+ * Vite is loaded only here: a server in production never needs it.
+ */
+export function serveClientSources(): ClientSources {
+  let vite: ViteDevServer | undefined;
+  return {
+    middleware(request, response, next) {
+      if (vite === undefined) next();
+      else vite.middlewares(request, response, next);
+    },
+    async open(server) {
+      const { createServer } = await import('vite');
+      vite = await createServer({ server: { middlewareMode: true, hmr: { server } }, appType: 'spa' });
+    },
+    async close() {
+      await vite?.close();
+    },
+  };
 }
