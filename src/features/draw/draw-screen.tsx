@@ -59,6 +59,7 @@ export function DrawScreen() {
               side="left"
               className={isDesk ? 'fold' : undefined}
               open={showsLocker}
+              aria-label={isDesk && showsLocker ? 'Locker' : undefined}
               onClick={() => (isDesk ? setIsLockerOpen(!isLockerOpen) : setOver(over === 'locker' ? null : 'locker'))}
             >
               {isDesk && showsLocker ? '' : 'Locker'}
@@ -69,6 +70,7 @@ export function DrawScreen() {
               side="right"
               className={isDesk ? 'fold' : undefined}
               open={showsParticulars}
+              aria-label={isDesk && showsParticulars ? 'Particulars' : undefined}
               onClick={() =>
                 isDesk
                   ? setIsParticularsOpen(!isParticularsOpen)
