@@ -61,6 +61,9 @@ export function KeepingAcross() {
         <Button look="plain" onClick={() => store.getState().retry()}>
           Try again
         </Button>
+        <Button look="plain" onClick={() => store.getState().resolveConflict('theirs')}>
+          Drop that change
+        </Button>
       </div>
     );
   }
