@@ -183,6 +183,21 @@ function useFlights(design: Design, layout: SheetLayout, size: { width: number; 
     latest.current = { design, layout, size };
   }, [design, layout, size]);
 
+  // The stage got another size, or the paper did, or another sheet lies there: what was shown whole stays whole.
+  const paperNow = boxOfPaper(design, sheetId);
+  const { width: paperWidth, height: paperHeight } = paperNow;
+  const shown = useRef({ paper: paperNow, size });
+  useEffect(() => {
+    const before = shown.current;
+    const paper = { x: 0, y: 0, width: paperWidth, height: paperHeight };
+    shown.current = { paper, size };
+    const fitted = viewOf(before.paper, before.size);
+    const view = flow.getViewport();
+    if (Math.abs(view.zoom - fitted.zoom) < 0.01 && Math.abs(view.x - fitted.x) < 2) {
+      void flow.setViewport(viewOf(paper, size));
+    }
+  }, [flow, size, paperWidth, paperHeight]);
+
   useEffect(() => {
     canvas.setState({ unitsPerPixel: 1 / flow.getZoom() });
     const now = latest.current;
@@ -197,19 +212,6 @@ function useFlights(design: Design, layout: SheetLayout, size: { width: number; 
     const zoom = Math.max(flow.getZoom(), 0.9);
     void flow.setCenter(box.x + box.width / 2, box.y + box.height / 2, { zoom, duration: steadyMs() });
   }, [flow, canvas, flight, sheetId]);
-
-  // The stage got another size: a sheet that was shown whole stays whole.
-  const lastSize = useRef(size);
-  useEffect(() => {
-    const before = lastSize.current;
-    lastSize.current = size;
-    if (before.width === size.width && before.height === size.height) return;
-    const fitted = viewOf(boxOfPaper(latest.current.design, sheetId), before);
-    const view = flow.getViewport();
-    if (Math.abs(view.zoom - fitted.zoom) < 0.01 && Math.abs(view.x - fitted.x) < 2) {
-      void flow.setViewport(viewOf(boxOfPaper(latest.current.design, sheetId), size));
-    }
-  }, [flow, size, sheetId]);
 }
 
 /** Wholly, and with a little room round it. */

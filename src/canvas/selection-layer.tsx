@@ -91,7 +91,7 @@ function RunMarks({
   return (
     <>
       {first !== undefined && <EndGrip at={first} />}
-      {last !== undefined && <EndGrip at={last} />}
+      {last !== undefined && drawn.stubs.length === 0 && <EndGrip at={last} />}
       {mayEdit &&
         (run.bends ?? []).map((bend, index) => (
           <path
@@ -161,6 +161,12 @@ export function HoverMarks({
     { end: run.from, at: drawn.points[0] },
     { end: run.to, at: drawn.points.at(-1) },
   ];
+  if (drawn.stubs.length > 0) {
+    // It is drawn from its end on this sheet to the flag, which says for itself where it goes on.
+    const [stub] = drawn.stubs;
+    const isToAway = stub!.to.deviceId === run.to.device;
+    ends.splice(0, 2, { end: isToAway ? run.from : run.to, at: drawn.points[0] });
+  }
   return ends.map(({ end, at }, i) =>
     at === undefined ? null : (
       <g key={i}>

@@ -6,7 +6,7 @@ import type { Design, Device } from '#shared/model/design.ts';
 import { formatA } from '#shared/units/current.ts';
 import { formatV } from '#shared/units/voltage.ts';
 import { useCanvasStore } from '#src/canvas/canvas-store.ts';
-import { selectRun } from '#src/canvas/selection.ts';
+import { selectDevice, selectRun } from '#src/canvas/selection.ts';
 import { useOpenDesign } from '#src/design/open-design.ts';
 import { Cell, EditCell, PickCell } from '#src/ui/cell.tsx';
 import { Check } from '#src/ui/check.tsx';
@@ -169,17 +169,25 @@ function RunsOn({ device }: { readonly device: Device }) {
     terminal: terminal.name,
     optional: terminal.optional,
     ends: endsOn(runs, device.id, terminal.name),
+    bolted: boltedOn(devices, device, terminal.name),
   }));
-  const shown = lines.filter(({ optional, ends }) => !optional || ends.length > 0);
+  const shown = lines.filter(({ optional, ends, bolted }) => !optional || ends.length + bolted.length > 0);
   return (
     <>
       <h3>Terminals</h3>
       <ul className="terminals">
-        {shown.map(({ terminal, ends }) => (
+        {shown.map(({ terminal, ends, bolted }) => (
           <li key={terminal}>
             <span className="mono">{terminal}</span>
             <span>
-              {ends.length === 0 && <span className="quiet">open</span>}
+              {ends.length + bolted.length === 0 && <span className="quiet">open</span>}
+              {bolted.map((other) => (
+                <button key={other.id} type="button" onClick={() => canvas.getState().show(selectDevice(other.id))}>
+                  {other.id === device.mountedOn?.device ? 'on ' : ''}
+                  <span className="mono">{other.mark ?? '?'}</span>
+                  {other.id === device.mountedOn?.device ? '' : ' on it'}
+                </button>
+              ))}
               {ends.map(({ run, other }) => (
                 <button key={run.id} type="button" onClick={() => canvas.getState().show(selectRun(run.id))}>
                   <span className="mono">{run.mark ?? '?'}</span> to {devices[other]?.mark ?? '?'}
@@ -191,6 +199,15 @@ function RunsOn({ device }: { readonly device: Device }) {
       </ul>
     </>
   );
+}
+
+/** What is joined to a terminal by its stud, with no wire between: a fuse on a battery's post stands on it by its `a`. */
+function boltedOn(devices: Design['devices'], device: Device, terminal: string): Device[] {
+  const holder = terminal === 'a' && device.mountedOn !== undefined ? devices[device.mountedOn.device] : undefined;
+  const held = Object.values(devices).filter(
+    ({ mountedOn }) => mountedOn?.device === device.id && mountedOn.terminal === terminal,
+  );
+  return holder === undefined ? held : [holder, ...held];
 }
 
 function endsOn(runs: Design['runs'], deviceId: string, terminal: string) {
