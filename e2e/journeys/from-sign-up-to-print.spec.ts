@@ -9,7 +9,7 @@ const FEET = 0.3048;
 /** One way, feet: typed as a fitter would, with what each comes to. */
 const LENGTHS = [
   ['W1', '6 in', 0.5],
-  ['W2', "1' 6\"", 1.5],
+  ['W2', '1\' 6"', 1.5],
   ['W3', '0.9 m', 0.9 / FEET],
   ['W4', '6 ft 4 in', 6 + 4 / 12],
   ['W5', '6 ft 4 in', 6 + 4 / 12],
@@ -87,7 +87,10 @@ test('a newcomer signs up, draws a small system, has it proved, reads the parts 
     await desk.type('W4', 'Length', '100 ft');
     await desk.type('W5', 'Length', '100 ft');
     await page.getByRole('link', { name: 'Findings' }).first().click();
-    const finding = page.getByRole('article').or(page.getByRole('listitem')).filter({ hasText: 'conductor/voltage-drop' });
+    const finding = page
+      .getByRole('article')
+      .or(page.getByRole('listitem'))
+      .filter({ hasText: 'conductor/voltage-drop' });
     await expect(finding.first()).toContainText('0.42 V');
     const remedy = finding.first().getByRole('button', { name: /AWG/ }).first();
     await remedy.click();

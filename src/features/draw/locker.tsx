@@ -50,6 +50,7 @@ export function Locker({ onArm }: { readonly onArm?: () => void }) {
 
   return (
     <aside className="locker" aria-label="Locker">
+      <h2 className="visually-hidden">Locker</h2>
       <FindField label="Find a device" value={sought} onChange={setSought} />
       <div className="drawers">
         {sought.trim() !== '' ? (
