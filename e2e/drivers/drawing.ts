@@ -117,7 +117,8 @@ export class DrawingDesk {
 
   /** Types into a cell of the run ledger and keeps it with Enter. A run out of view is sought by its mark first. */
   async type(mark: string, column: string, text: string): Promise<void> {
-    if (!(await this.row(mark).isVisible())) await this.page.getByLabel('Filter runs').fill(mark);
+    const filter = this.page.getByLabel('Filter runs');
+    if (!(await this.row(mark).isVisible())) await filter.fill(mark);
     const titles = await this.ledger.getByRole('columnheader').allInnerTexts();
     const cell = this.row(mark).getByRole('gridcell').nth(titles.indexOf(column));
     await cell.click();
@@ -125,6 +126,6 @@ export class DrawingDesk {
     if ((await cell.getByRole('textbox').count()) === 0) await this.page.keyboard.press('Enter');
     await cell.getByRole('textbox').fill(text);
     await this.page.keyboard.press('Enter');
-    await this.page.getByLabel('Filter runs').fill('');
+    if ((await filter.inputValue()) !== '') await filter.fill('');
   }
 }

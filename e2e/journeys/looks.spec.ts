@@ -37,6 +37,7 @@ for (const [size, viewport] of [
     designerPage: page,
     vessels,
   }) => {
+    test.setTimeout(180_000);
     const vessel = await vessels.make(`Stint ${size}`, { file: minnowFile() });
     await vessel.change('Length of W12', [{ op: 'remove', path: ['runs', 'w12', 'lengthM'] }]);
     await page.setViewportSize(viewport);
