@@ -42,7 +42,8 @@ function shorten(said) {
 
 /** Runs one of our TypeScript commands, which ends when this one dies: else it would write on behind the next start. */
 export function runTypeScript(sentence, file, args, env) {
-  const nodeArgs = ['--import', 'tsx', '--import', join(import.meta.dirname, 'with-parent.mjs')];
+  // Before all else, so that it hears of a parent that dies while the rest is being loaded.
+  const nodeArgs = ['--import', join(import.meta.dirname, 'with-parent.mjs'), '--import', 'tsx'];
   return runOrStop(sentence, process.execPath, [...nodeArgs, file, ...args], {
     env: { ...process.env, ...env },
     withParent: true,

@@ -1,5 +1,5 @@
 import { randomBytes } from 'node:crypto';
-import { mkdir, readFile, writeFile } from 'node:fs/promises';
+import { mkdir, readFile, rename, writeFile } from 'node:fs/promises';
 import { join } from 'node:path';
 import { fileURLToPath } from 'node:url';
 
@@ -29,17 +29,24 @@ export async function seedDemo(
 ): Promise<{ readonly seeded: boolean; readonly signIns: readonly DemoSignIn[] }> {
   if (!(await isEmpty(db))) return { seeded: false, signIns: [] };
   const signIns = DEMO_PEOPLE.map((one) => ({ ...one, password: randomBytes(9).toString('base64url') }));
-  await mkdir(folder, { recursive: true, mode: 0o700 });
-  // Before the people are there: a seeding cut short leaves a list of nobody, never people without a password.
-  await writeFile(join(folder, 'sign-ins.json'), `${JSON.stringify(signIns, null, 2)}\n`, { mode: 0o600 });
   const hashes = await Promise.all(signIns.map((one) => hashPassword(one.password)));
   const minnow = await readMinnow();
   const seeded = await inTransaction(db, async (tx) => {
     if (!(await isEmpty(tx))) return false;
     await insertDemo(tx, signIns, hashes, minnow);
+    // Just before the people are there for all: a seeding cut short leaves a list of nobody, never people without a
+    // password; and one that comes too late finds people here and leaves the list alone.
+    await keepSignIns(folder, signIns);
     return true;
   });
   return { seeded, signIns: seeded ? signIns : [] };
+}
+
+async function keepSignIns(folder: string, signIns: readonly DemoSignIn[]): Promise<void> {
+  await mkdir(folder, { recursive: true, mode: 0o700 });
+  const file = join(folder, 'sign-ins.json');
+  await writeFile(`${file}.new`, `${JSON.stringify(signIns, null, 2)}\n`, { mode: 0o600 });
+  await rename(`${file}.new`, file);
 }
 
 async function insertDemo(
