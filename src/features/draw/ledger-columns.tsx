@@ -181,7 +181,7 @@ export const COLUMNS: readonly Column[] = [
   {
     key: 'path',
     title: 'Path',
-    width: 56,
+    width: 64,
     right: true,
     wideOnly: true,
     show: ({ run }, { analysis }) => {
