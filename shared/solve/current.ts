@@ -7,6 +7,7 @@ import { runOhmAt, warmestC, type Ampacity } from './conductor.ts';
 import type { LoadDemand } from './demand.ts';
 import type { Flow } from './flow.ts';
 import type { NetworkEdge, RunEdge, SourceEdge } from './network.ts';
+import { otherWays, type OtherWay } from './other-ways.ts';
 import { amountOf, ratingsOf } from './ratings.ts';
 
 /** What a run must be fit to carry, and in which mode that is. */
@@ -40,7 +41,7 @@ const JOULE_PER_KELVIN_CM3 = 3.45;
 /**
  * The worst over the design's modes, taken literally, and over the built-in ones with demand: all continuous loads
  * and the greater of the largest and a tenth of the intermittent ones; momentary ones by the heat they make.
- * A starter is never counted: its path is exempt and its drop judged. Never less than what a source can give.
+ * A way that carries nothing as the boat is left carries what a switch can lead over it. A starter is never counted: its path is exempt and its drop judged. Never less than what a source can give.
  */
 export function designCurrents(
   design: Design,
@@ -68,7 +69,7 @@ export function designCurrents(
   const heating = (edge: RunEdge, amperes: number, minutes: number) =>
     amperes * heatingShare(edge, minutes, ampacities.get(edge.run.id), basis, design);
 
-  const demanded = demandOn(byEdge, leftOut, allOn);
+  const demanded = demandOn(byEdge, leftOut, allOn, otherWays(circuits, loads, leftOut, allOn));
   for (const edge of circuits.runs) {
     worst.set(edge.run.id, { designCurrentA: 0, governingMode: null });
     const momentary = demanded.momentary.reduce((sum, { minutes, onEdge }) => {
@@ -114,7 +115,12 @@ interface Demanded {
   readonly momentary: readonly { readonly minutes: number; readonly onEdge: Float64Array }[];
 }
 
-function demandOn(byEdge: ReadonlyMap<number, LoadDemand>, leftOut: readonly LeftOut[], allOn: Flow): Demanded {
+function demandOn(
+  byEdge: ReadonlyMap<number, LoadDemand>,
+  leftOut: readonly LeftOut[],
+  allOn: Flow,
+  ways: readonly OtherWay[],
+): Demanded {
   const held = (demand: LoadDemand['demand']) => (edge: { readonly index: number }) => {
     const load = byEdge.get(edge.index);
     return load?.demand === demand ? load.heldA : 0;
@@ -142,6 +148,21 @@ function demandOn(byEdge: ReadonlyMap<number, LoadDemand>, leftOut: readonly Lef
       const momentary = demanded.momentary.find((each) => each.minutes === load.onMinutes);
       if (isMomentary(load) && momentary) momentary.onEdge[index]! += load.heldA;
     }
+  }
+  const continuousA = (load: LoadDemand) => (load.demand === 'continuous' ? load.heldA : 0);
+  const intermittentA = (load: LoadDemand) => (load.demand === 'intermittent' ? load.heldA : 0);
+  const momentaryA = demanded.momentary.map(({ minutes: each, onEdge }) => ({
+    onEdge,
+    of: (load: LoadDemand) => (isMomentary(load) && load.onMinutes === each ? load.heldA : 0),
+  }));
+  for (const { edges, behind } of ways) {
+    const raise = (onEdge: Float64Array, amount: number) => {
+      for (const { index } of edges) onEdge[index] = Math.max(onEdge[index]!, amount);
+    };
+    raise(demanded.continuous, behind(continuousA));
+    raise(demanded.intermittent, behind(intermittentA));
+    raise(demanded.largest, behind(intermittentA, 'max'));
+    for (const { onEdge, of } of momentaryA) raise(onEdge, behind(of));
   }
   return demanded;
 }

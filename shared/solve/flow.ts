@@ -13,6 +13,8 @@ export interface Flow {
   currentOf(edge: NetworkEdge): number;
   /** For each edge, by index: what the loads behind it come to, each taken at `amountOf`, added or the greatest. */
   spread(amountOf: (load: LoadEdge) => number, combine?: 'sum' | 'max'): Float64Array;
+  /** The same for each node: what the loads come to that are fed from it. */
+  gather(amountOf: (load: LoadEdge) => number, combine?: 'sum' | 'max'): Float64Array;
 }
 
 const LEAST_A = 1e-9;
@@ -22,7 +24,8 @@ export function flowOf(network: Network, solved: ModeAnalysis, circuits: Circuit
   const order = loadsFirst(network, currents, circuits);
   return {
     currentOf: (edge) => currents[edge.index]!,
-    spread: (amountOf, combine = 'sum') => spread(network, circuits, currents, order, amountOf, combine),
+    spread: (amountOf, combine = 'sum') => spread(network, circuits, currents, order, amountOf, combine).onEdge,
+    gather: (amountOf, combine = 'sum') => spread(network, circuits, currents, order, amountOf, combine).atNode,
   };
 }
 
@@ -102,7 +105,7 @@ function spread(
   order: readonly number[],
   amountOf: (load: LoadEdge) => number,
   combine: 'sum' | 'max',
-): Float64Array {
+): { onEdge: Float64Array; atNode: Float64Array } {
   const add = combine === 'sum' ? (a: number, b: number) => a + b : Math.max;
   const atNode = new Float64Array(network.nodes.length);
   for (const edge of network.edges) {
@@ -129,5 +132,5 @@ function spread(
       atNode[battery.b] = add(atNode[battery.b]!, share);
     }
   }
-  return onEdge;
+  return { onEdge, atNode };
 }
