@@ -46,6 +46,14 @@ describe('prove', () => {
     expect(prove(edited('accepted', accepted, wrong)).status).toBe(0);
   });
 
+  it('ends quietly, with its own exit code, where nobody reads to the end', () => {
+    const file = join(folder, 'wrong.ampwright.json');
+    writeFileSync(file, JSON.stringify(edited('devices.f1.ratings.ratedA', 60)));
+    const script = `"$0" --import tsx server/commands/prove.ts "$1" | true; exit \${PIPESTATUS[0]}`;
+    const { status, stderr } = spawnSync('bash', ['-c', script, process.execPath, file], { encoding: 'utf8' });
+    expect([status, stderr]).toEqual([1, '']);
+  });
+
   it('ends with 2 and the place and reason of what it cannot read, and nothing on standard output', () => {
     expect(prove(edited('runs.w1.lengthM', 0))).toEqual({
       status: 2,

@@ -8,6 +8,10 @@ import { readDesign } from '#shared/files/read-design.ts';
  * `npm run --silent prove -- FILE`: the analysis of a design file as JSON. Exit 0: no must-fix finding is left that
  * is not accepted; 1: some; 2: the file can't be read, with the reason on standard error.
  */
+// Whoever reads only the first lines closes the pipe; the exit code still tells what was found.
+process.stdout.on('error', (error: NodeJS.ErrnoException) => {
+  if (error.code !== 'EPIPE') throw error;
+});
 process.exitCode = prove(process.argv[2]);
 
 function prove(file: string | undefined): number {

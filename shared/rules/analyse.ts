@@ -11,6 +11,7 @@ import { ownModes, proveDesign, type Proof, type ProvedRun } from '#shared/solve
 
 import { readable } from './readable.ts';
 import { compareNaturally, compareText } from './marks.ts';
+import { withoutHarm } from './harmless.ts';
 import { applyRule } from './rule.ts';
 import { RULES } from './index.ts';
 
@@ -32,7 +33,7 @@ export function analyse(given: Design, catalogue: Catalogue = {}): Analysis {
     faults: proof.faults,
     energy: energyOf(proof),
     parts: catalogue.partsOf?.(design) ?? [],
-    findings: findingsOf(proof),
+    findings: withoutHarm(findingsOf(proof), proof, findingsOf),
   };
 }
 

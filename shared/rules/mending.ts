@@ -12,7 +12,14 @@ export function mayChange(entity: { readonly locked?: boolean }): boolean {
 }
 
 export function useSize(proof: Proof, run: ProvedRun, size: Size): Remedy {
-  return { title: `Use ${size} for ${callOf(run.run)}`, patch: sizePatches(proof, run, size) };
+  return useSizeFor(proof, [run], size);
+}
+
+export function useSizeFor(proof: Proof, runs: readonly ProvedRun[], size: Size): Remedy {
+  return {
+    title: `Use ${size} for ${listOf(runs.map(({ run }) => callOf(run)))}`,
+    patch: runs.flatMap((run) => sizePatches(proof, run, size)),
+  };
 }
 
 /** The cores of a cable change together: they lie in one jacket. */

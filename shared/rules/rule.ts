@@ -63,15 +63,32 @@ export function applyRule(rule: Rule, proof: Proof): Finding[] {
 
 /** The unit of a figure stands at the end of its name: `ratedA`, `stubM`, `lostV`, `share`. */
 function fillIn(message: string, figures: Spoken['figures'], { basis }: Proof): string {
+  const inMessage = [...message.matchAll(/\{(\w+)\}/g)].map(([, name]) => name!);
   return message.replace(/\{(\w+)\}/g, (_, name: string) => {
     const figure = figures[name];
     if (typeof figure !== 'number') return figure ?? '';
-    if (name.endsWith('A')) return formatA(figure);
-    if (name.endsWith('M')) return formatLength(figure, basis.units);
+    const beside = inMessage.flatMap((other) => {
+      const value = figures[other];
+      return typeof value === 'number' && other.at(-1) === name.at(-1) ? [value] : [];
+    });
+    if (name.endsWith('A')) return toldApart(figure, beside, formatA);
+    if (name.endsWith('M')) return toldApart(figure, beside, (m, finer) => formatLength(m, basis.units, finer));
     if (name.endsWith('V')) return formatV(figure);
     if (name.endsWith('C')) return formatC(figure);
     if (name.endsWith('Count')) return String(figure);
     const { limit } = figures;
     return typeof limit === 'number' ? formatPercentBeside(figure, limit) : formatPercent(figure);
   });
+}
+
+const MOST_MORE_DECIMALS = 6;
+
+/** With as many more decimals as it takes for no other figure of the message to read the same and be another. */
+function toldApart(figure: number, others: readonly number[], format: (figure: number, finer: number) => string) {
+  const apart = others.filter((other) => Math.abs(other - figure) > 1e-9 * Math.abs(figure));
+  for (let finer = 0; finer < MOST_MORE_DECIMALS; finer++) {
+    const text = format(figure, finer);
+    if (apart.every((other) => format(other, finer) !== text)) return text;
+  }
+  return format(figure, 0);
 }

@@ -31,7 +31,7 @@ export function otherWays(
   const { network } = circuits;
   const isUsed = usedEdges(circuits, leftOut, allOn);
   const isLive = network.nodes.map(({ index }) => network.edgesAt(index).some((edge) => isUsed[edge.index]));
-  const atNodes = atNodesOf(circuits, loads, leftOut, allOn);
+  const atNodes = atNodesOf(loads, leftOut, allOn);
   return idleParts(circuits, isUsed, isLive).flatMap((part) => {
     if (!part.some((edge) => edge.type === 'contact' && !edge.element.closed)) return [];
     const ends = [...new Set(part.flatMap(({ a, b }) => [a, b]))].filter((node) => isLive[node]);
@@ -55,12 +55,7 @@ function usedEdges(circuits: Circuits, leftOut: readonly LeftOut[], allOn: Flow)
 }
 
 /** Found once for each kind of load that is asked for. */
-function atNodesOf(
-  circuits: Circuits,
-  loads: readonly LoadDemand[],
-  leftOut: readonly LeftOut[],
-  allOn: Flow,
-): AtNodes {
+function atNodesOf(loads: readonly LoadDemand[], leftOut: readonly LeftOut[], allOn: Flow): AtNodes {
   const byEdge = new Map(loads.map((load) => [load.edge.index, load]));
   const known = new Map<(load: LoadDemand) => number, Map<string, Float64Array>>();
   return (amountOf, combine) => {

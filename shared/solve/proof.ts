@@ -194,7 +194,7 @@ function proveRun(
   const ampacity = ampacities.get(run.id)!;
   const current = currents.get(run.id) ?? { designCurrentA: 0, governingMode: null };
   const nominalV = circuitV(circuits, edge.a, edge.b);
-  const protection = protectionOf(edge, circuits, regions, ampacity, basis);
+  const protection = protectionOf(edge, circuits, regions, ampacities, basis);
   const isElectronics = electronics.has(run.id) && protection.some((end) => end.device !== undefined);
   const isReturn = circuits.netOf(edge.a).side === 'return';
   const minimum = isSignal

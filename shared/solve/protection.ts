@@ -6,8 +6,18 @@ import { DISTANCES, NEXT_STANDARD_CEILING, nextRatingUp } from '#shared/tables/p
 import type { Circuits } from './circuits.ts';
 import type { Ampacity } from './conductor.ts';
 import type { RunEdge } from './network.ts';
-import { ratingsOf } from './ratings.ts';
-import { coveringOf, worstCovering, type Covering, type Guard, type Regions, type Side, type Way } from './regions.ts';
+import { amountOf, ratingsOf } from './ratings.ts';
+import {
+  coveringOf,
+  greater,
+  isOnCrankingPath,
+  worstCovering,
+  type Covering,
+  type Guard,
+  type Regions,
+  type Side,
+  type Way,
+} from './regions.ts';
 
 /** What protects one end of a run, or that nothing does. */
 export interface EndProtection {
@@ -26,6 +36,8 @@ export interface EndProtection {
   readonly source?: Device;
   /** The run next to this one on the way to the source; none where it starts at the source itself. */
   readonly ahead?: EntityId;
+  /** The run next to this one on the way to the device ahead; none where it starts at the device itself. */
+  readonly fedBy?: EntityId;
 }
 
 export interface Stub {
@@ -48,7 +60,7 @@ export function protectionOf(
   edge: RunEdge,
   circuits: Circuits,
   regions: Regions,
-  ampacity: Ampacity,
+  ampacities: ReadonlyMap<EntityId, Ampacity>,
   basis: FullBasis,
 ): EndProtection[] {
   const side = circuits.netOf(edge.a).side;
@@ -58,16 +70,14 @@ export function protectionOf(
   if (!sides) return [];
   return (['from', 'to'] as const).flatMap((fromEnd) => {
     const [here, there] = fromEnd === 'from' ? [sides.from, sides.to] : [sides.to, sides.from];
-    return endProtection(edge, fromEnd, here, there, circuits, regions, ampacity, basis) ?? [];
+    return endProtection(edge, fromEnd, here, there, circuits, regions, ampacities, basis) ?? [];
   });
 }
 
 /** On the path from a battery, over switches and selectors, to a starter, or on the way back. */
 export function isCrankingRun(run: EntityId, regions: Regions): boolean {
   const sides = regions.sidesOf(run);
-  if (!sides) return false;
-  const { from, to } = sides;
-  return (from.hasStarter && to.hasBattery) || (to.hasStarter && from.hasBattery);
+  return sides !== undefined && isOnCrankingPath(sides);
 }
 
 function endProtection(
@@ -77,10 +87,12 @@ function endProtection(
   there: Side,
   circuits: Circuits,
   regions: Regions,
-  ampacity: Ampacity,
+  ampacities: ReadonlyMap<EntityId, Ampacity>,
   basis: FullBasis,
 ): EndProtection | undefined {
-  const { source, feeding } = here;
+  const { source } = here;
+  const ampacity = ampacities.get(edge.run.id)!;
+  const feeding = feedingHere(here);
   if (source) {
     const leadsIntoBank =
       !there.nearest && source.bank !== undefined && [there.source?.bank, there.stacked].includes(source.bank);
@@ -89,7 +101,7 @@ function endProtection(
     return {
       fromEnd,
       how: 'near',
-      source: source.device,
+      source: (source.tap ?? source).device,
       stub: stubOf(edge, here, there, basis),
       ...ratingOf(there.largest, edge, ampacity, basis),
     };
@@ -102,12 +114,42 @@ function endProtection(
   const others = (here.feeders ?? [])
     .map(({ device }) => device)
     .filter((device) => device !== feeding.device && !feeding.beside.includes(device));
-  const upstream = { fromEnd, how: 'upstream', ...byUpstream, ...(others.length > 0 && { others }) } as const;
+  const fedBy = here.feeder?.way?.run;
+  const upstream = {
+    fromEnd,
+    how: 'upstream',
+    ...byUpstream,
+    ...(others.length > 0 && { others }),
+    ...(fedBy && { fedBy: fedBy.id }),
+  } as const;
   if (!there.nearest) return upstream;
   // A smaller conductor tapped from a larger one: its own device stands for it, if it is near enough.
   const byOwn = ratingOf(there.largest, edge, ampacity, basis);
   if (!isAllowed(byOwn)) return upstream;
-  return { fromEnd, how: 'near', source: feeding.device, stub: stubOf(edge, here, there, basis), ...byOwn };
+  const stub = stubOf(edge, here, there, basis);
+  // What starts at the device itself, or goes on from a run that it does not protect either, is no tap.
+  const isTap = fedBy && isAllowed(ratingOf(feeding, { run: fedBy }, ampacities.get(fedBy.id)!, basis));
+  if (!isTap && stub.verdict === 'too far') return upstream;
+  return { fromEnd, how: 'near', source: feeding.device, stub, ...byOwn };
+}
+
+/** Devices side by side pass what they pass together only where all of them stand on this side of the run. */
+function feedingHere({ feeding, feeders = [] }: Side): Guard | undefined {
+  if (feeders.every(({ beside }) => beside.length === 0)) return feeding;
+  const here = new Set(feeders.map(({ device }) => device));
+  return feeders
+    .map((guard): Guard => {
+      const beside = guard.beside.filter((device) => here.has(device));
+      if (beside.length === guard.beside.length) return guard;
+      const ratings = [guard.device, ...beside].map((device) => amountOf(ratingsOf(device), 'ratedA'));
+      const isTold = ratings.every((each) => each !== undefined);
+      return {
+        device: guard.device,
+        beside,
+        ratedA: isTold ? ratings.reduce((sum: number, each) => sum + each!, 0) : undefined,
+      };
+    })
+    .reduce<Guard | undefined>(greater, undefined);
 }
 
 /** Of devices in series, with no other way for current to come, the smallest protects what is behind all of them. */
@@ -147,7 +189,7 @@ interface Rating {
   readonly allowedRatingA?: number;
 }
 
-function ratingOf(guard: Guard | undefined, edge: RunEdge, ampacity: Ampacity, basis: FullBasis): Rating {
+function ratingOf(guard: Guard | undefined, edge: Pick<RunEdge, 'run'>, ampacity: Ampacity, basis: FullBasis): Rating {
   if (!guard) return {};
   const { device, beside, ratedA } = guard;
   return {
@@ -186,7 +228,8 @@ export function allowedRatingA(
 
 function stubOf(edge: RunEdge, here: Side, there: Side, basis: FullBasis): Stub {
   const { run } = edge;
-  const { source, feeding } = here;
+  const { feeding } = here;
+  const source = here.source?.tap ?? here.source;
   const device = there.nearest!;
   const distances = DISTANCES[basis.profile];
   const enclosedLimitM = source ? enclosedLimitOf(source.device, basis) : distances.enclosedElsewhereM;

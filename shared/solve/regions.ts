@@ -2,7 +2,7 @@ import type { FullBasis } from '#shared/model/defaults.ts';
 import type { Device, EntityId, Run } from '#shared/model/design.ts';
 
 import { canConduct, type Bank, type Circuits } from './circuits.ts';
-import { otherEnd, type ContactEdge, type NetworkEdge } from './network.ts';
+import { otherEnd, type ContactEdge, type Network, type NetworkEdge } from './network.ts';
 import { amountOf, ratingsOf } from './ratings.ts';
 import { Union } from './union.ts';
 
@@ -19,6 +19,8 @@ export interface Side {
   readonly largest?: Guard;
   readonly feeding?: Guard;
   readonly feeders?: readonly Guard[];
+  /** The nearest of those that feed it. */
+  readonly feeder?: Reach;
   /** A battery that stands on another with its negative here: the link between them is inside their bank. */
   readonly stacked?: Bank;
   readonly hasBattery: boolean;
@@ -42,6 +44,8 @@ export interface Reach {
   readonly covering: Covering;
   readonly bank?: Bank;
   readonly way: Way | undefined;
+  /** Of a source reached along a cranking path, which is exempt: the way from the stud where it is left. */
+  readonly tap?: Reach;
 }
 
 /** Worst first. */
@@ -103,6 +107,7 @@ export function regionsOf(circuits: Circuits, basis: FullBasis): Regions {
         largest: guard,
         feeding,
         feeders: feeding && [feeding],
+        feeder: feeding && reach,
         hasBattery: false,
         hasStarter: false,
       });
@@ -119,7 +124,9 @@ export function regionsOf(circuits: Circuits, basis: FullBasis): Regions {
     return side;
   };
 
-  const messages = passMessages(circuits, isBranch, ownSide);
+  const literally = passMessages(circuits, isBranch, ownSide, new Set());
+  const cranking = new Set(circuits.runs.filter((edge) => isOnCrankingPath(sidesIn(literally, edge))));
+  const messages = cranking.size === 0 ? literally : passMessages(circuits, isBranch, ownSide, cranking);
   const mains = new Set<EntityId>();
   for (const gate of gates) {
     const besideBattery = [gate.a, gate.b].some((node) => messages.whole(node).source?.bank !== undefined);
@@ -129,7 +136,7 @@ export function regionsOf(circuits: Circuits, basis: FullBasis): Regions {
   return {
     sidesOf(runId) {
       const edge = messages.edgeOf.get(runId);
-      return edge && { from: messages.side(edge, edge.a), to: messages.side(edge, edge.b) };
+      return edge && sidesIn(messages, edge);
     },
     isMain: (device) => mains.has(device),
     onlyOneAhead(deviceId) {
@@ -156,6 +163,15 @@ export function regionsOf(circuits: Circuits, basis: FullBasis): Regions {
       return ahead;
     },
   };
+}
+
+function sidesIn(messages: Messages, edge: NetworkEdge): { readonly from: Side; readonly to: Side } {
+  return { from: messages.side(edge, edge.a), to: messages.side(edge, edge.b) };
+}
+
+/** On the path from a battery, over switches and selectors, to a starter, or on the way back. */
+export function isOnCrankingPath({ from, to }: { readonly from: Side; readonly to: Side }): boolean {
+  return (from.hasStarter && to.hasBattery) || (to.hasStarter && from.hasBattery);
 }
 
 function pushTo<Key, Item>(lists: Map<Key, Item[]>, key: Key, item: Item): void {
@@ -270,8 +286,22 @@ interface Messages {
 }
 
 /** Two passes over the spanning trees of the regions: inwards to the root and out again. Linear in the network. */
-function passMessages(circuits: Circuits, isBranch: ReadonlySet<number>, ownSide: (node: number) => Side): Messages {
+function passMessages(
+  circuits: Circuits,
+  isBranch: ReadonlySet<number>,
+  ownSide: (node: number) => Side,
+  cranking: ReadonlySet<NetworkEdge>,
+): Messages {
   const { network } = circuits;
+  const devices = cranking.size === 0 ? undefined : devicesOf(network);
+  const extend = (side: Side, edge: NetworkEdge, to: number): Side => {
+    const extended = extendAlong(side, edge);
+    const { source } = extended;
+    if (!source || edge.type !== 'run' || !cranking.has(edge)) return extended;
+    const stud = devices!.get((edge.b === to ? edge.run.to : edge.run.from).device) ?? source.device;
+    const tap: Reach = { device: stud, lengthM: 0, isLengthKnown: true, covering: 'enclosed', way: undefined };
+    return { ...extended, source: { ...source, tap } };
+  };
   const order: number[] = [];
   const parentEdge: (NetworkEdge | undefined)[] = network.nodes.map(() => undefined);
   const seen = network.nodes.map(() => false);
@@ -297,7 +327,7 @@ function passMessages(circuits: Circuits, isBranch: ReadonlySet<number>, ownSide
     const edge = parentEdge[node];
     if (!edge) continue;
     const parent = otherEnd(edge, node);
-    below[parent] = merge(below[parent]!, extend(below[node]!, edge));
+    below[parent] = merge(below[parent]!, extend(below[node]!, edge, parent));
   }
   const above: Side[] = network.nodes.map(() => NOTHING);
   for (const node of order) {
@@ -305,8 +335,8 @@ function passMessages(circuits: Circuits, isBranch: ReadonlySet<number>, ownSide
     const children = network
       .edgesAt(node)
       .filter((edge) => isBranch.has(edge.index) && edge !== up && parentEdge[otherEnd(edge, node)] === edge);
-    const fromAbove = up ? extend(above[node]!, up) : NOTHING;
-    const parts = children.map((edge) => extend(below[otherEnd(edge, node)]!, edge));
+    const fromAbove = up ? extend(above[node]!, up, node) : NOTHING;
+    const parts = children.map((edge) => extend(below[otherEnd(edge, node)]!, edge, node));
     const after: Side[] = [NOTHING];
     for (const part of parts.toReversed()) after.push(merge(part, after.at(-1)!));
     let before = merge(own[node]!, fromAbove);
@@ -318,7 +348,7 @@ function passMessages(circuits: Circuits, isBranch: ReadonlySet<number>, ownSide
 
   const whole = (node: number): Side => {
     const up = parentEdge[node];
-    return up ? merge(below[node]!, extend(above[node]!, up)) : below[node]!;
+    return up ? merge(below[node]!, extend(above[node]!, up, node)) : below[node]!;
   };
   return {
     edgeOf: new Map(circuits.runs.map((edge) => [edge.run.id, edge])),
@@ -333,10 +363,22 @@ function passMessages(circuits: Circuits, isBranch: ReadonlySet<number>, ownSide
   };
 }
 
-function extend(side: Side, edge: NetworkEdge): Side {
+function devicesOf(network: Network): ReadonlyMap<EntityId, Device> {
+  const devices = new Map<EntityId, Device>();
+  for (const { join } of network.nodes) if (join) devices.set(join.id, join);
+  for (const edge of network.edges) if (edge.type !== 'run') devices.set(edge.device.id, edge.device);
+  return devices;
+}
+
+function extendAlong(side: Side, edge: NetworkEdge): Side {
   if (edge.type === 'contact' && !carriesCranking(edge)) return { ...side, hasBattery: false, hasStarter: false };
   if (edge.type !== 'run') return side;
-  return { ...side, source: along(side.source, edge.run), nearest: along(side.nearest, edge.run) };
+  return {
+    ...side,
+    source: along(side.source, edge.run),
+    nearest: along(side.nearest, edge.run),
+    feeder: along(side.feeder, edge.run),
+  };
 }
 
 /** The way to a starter leads over selectors and battery switches; one that does not say what it is for may be one. */
@@ -358,6 +400,7 @@ function along(reach: Reach | undefined, run: Run): Reach | undefined {
     isLengthKnown: reach.isLengthKnown && run.lengthM !== undefined,
     covering: worstCovering(reach.covering, coveringOf(run)),
     way: { run, beyond: reach.way },
+    tap: along(reach.tap, run),
   };
 }
 
@@ -381,6 +424,7 @@ function merge(a: Side, b: Side): Side {
     nearest: nearer(a.nearest, b.nearest),
     largest: greater(a.largest, b.largest),
     feeding: greater(a.feeding, b.feeding),
+    feeder: nearer(a.feeder, b.feeder),
     feeders: a.feeders && b.feeders ? [...a.feeders, ...b.feeders] : (a.feeders ?? b.feeders),
     stacked: a.stacked ?? b.stacked,
     hasBattery: a.hasBattery || b.hasBattery,
@@ -390,11 +434,13 @@ function merge(a: Side, b: Side): Side {
 
 function nearer(a: Reach | undefined, b: Reach | undefined): Reach | undefined {
   if (!a || !b) return a ?? b;
-  if (a.lengthM !== b.lengthM) return a.lengthM < b.lengthM ? a : b;
+  const [toA, toB] = [(a.tap ?? a).lengthM, (b.tap ?? b).lengthM];
+  if (toA !== toB) return toA < toB ? a : b;
+  if (!a.tap !== !b.tap) return a.tap ? b : a;
   return a.device.id <= b.device.id ? a : b;
 }
 
-function greater(a: Guard | undefined, b: Guard | undefined): Guard | undefined {
+export function greater(a: Guard | undefined, b: Guard | undefined): Guard | undefined {
   if (!a || !b) return a ?? b;
   const [ofA, ofB] = [a.ratedA ?? Infinity, b.ratedA ?? Infinity];
   if (ofA !== ofB) return ofA > ofB ? a : b;

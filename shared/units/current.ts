@@ -2,9 +2,9 @@ import { formatFigures, readQuantity } from './number.ts';
 
 export const AMPS_ACCEPTED = 'Type a current such as 15, 15 A or 300 mA.';
 
-/** `287 A`, `13.6 A`, `0.42 A`. */
-export function formatA(amps: number): string {
-  return `${formatFigures(amps)} A`;
+/** `287 A`, `13.6 A`, `0.42 A`; with as many more decimals as are asked for: `60.01 A`. */
+export function formatA(amps: number, finer = 0): string {
+  return `${formatFigures(amps, finer)} A`;
 }
 
 /** `15`, `15 A`, `300 mA`, `1.5 kA`. */

@@ -51,18 +51,22 @@ export function readLengthM(text: string, units: UnitSystem): number | undefined
   return rest === undefined ? undefined : round(lengthM + rest);
 }
 
-/** `6 ft 4 in`, under a foot `7.1 in`; `1.9 m`. What was printed, read back and printed again, is the same. */
-export function formatLength(lengthM: number, units: UnitSystem): string {
+/**
+ * `6 ft 4 in`, under a foot `7.1 in`; `1.9 m`. What was printed, read back and printed again, is the same. With as many
+ * more decimals as are asked for: `7.91 in`, `6 ft 0.3 in`, `1.804 m`.
+ */
+export function formatLength(lengthM: number, units: UnitSystem, finer = 0): string {
   if (!Number.isFinite(lengthM)) return 'unknown';
-  return units === 'us' ? formatFeet(Math.max(0, lengthM)) : formatMetres(Math.max(0, lengthM));
+  return units === 'us' ? formatFeet(Math.max(0, lengthM), finer) : formatMetres(Math.max(0, lengthM), finer);
 }
 
 /** Without a comma for thousands, which half the world would read as a decimal point. */
-function formatMetres(lengthM: number): string {
-  return `${Number(lengthM.toFixed(lengthM < 0.9995 ? 3 : 2))} m`;
+function formatMetres(lengthM: number, finer: number): string {
+  return `${Number(lengthM.toFixed((lengthM < 0.9995 ? 3 : 2) + finer))} m`;
 }
 
-function formatFeet(lengthM: number): string {
+function formatFeet(lengthM: number, finer: number): string {
+  if (finer > 0) return formatFinerFeet(lengthM, finer);
   const tenths = Math.round((lengthM / INCH) * 10);
   if (tenths < 120) return `${tenths / 10} in`;
   const halves = Math.round((lengthM / INCH) * 2);
@@ -73,6 +77,16 @@ function formatFeet(lengthM: number): string {
   if (inches === 0 && !half) return feetText;
   const inchText = half ? (inches === 0 ? '1/2' : `${inches} 1/2`) : String(inches);
   return `${feetText} ${inchText} in`;
+}
+
+function formatFinerFeet(lengthM: number, finer: number): string {
+  const isShort = Math.round((lengthM / INCH) * 10) < 120;
+  const decimals = isShort ? finer + 1 : finer;
+  const inches = Number((lengthM / INCH).toFixed(decimals));
+  if (isShort) return `${inches} in`;
+  const feet = Math.floor(inches / 12);
+  const rest = Number((inches - 12 * feet).toFixed(decimals));
+  return rest === 0 ? `${feet.toLocaleString('en-US')} ft` : `${feet.toLocaleString('en-US')} ft ${rest} in`;
 }
 
 interface Part {

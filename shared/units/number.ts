@@ -10,11 +10,11 @@ export function formatNumber(value: number, decimals = 2): string {
 }
 
 /** Three figures that matter, and never fewer than the whole number has: 287, 13.6, 0.42, 1,234. */
-export function formatFigures(value: number): string {
+export function formatFigures(value: number, finer = 0): string {
   const size = Math.abs(value);
-  if (size >= 99.95) return formatNumber(value, 0);
-  if (size >= 9.995) return formatNumber(value, 1);
-  return formatNumber(value, 2);
+  if (size >= 99.95) return formatNumber(value, finer);
+  if (size >= 9.995) return formatNumber(value, 1 + finer);
+  return formatNumber(value, 2 + finer);
 }
 
 /**

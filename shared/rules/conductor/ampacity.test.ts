@@ -54,6 +54,31 @@ testRule(ampacity, {
       figures: { designCurrentA: 25.1, allowedA: 25, baseA: 25 },
     },
     {
+      name: 'a hundredth of an ampere too much: the two figures do not read the same',
+      given: fusedRun(30, { size: '16 AWG', loadA: 25.01 }),
+      says: [
+        'W1 has to carry 25.01 A; 16 AWG carries 25 A there.',
+        'W2 has to carry 25.01 A; 16 AWG carries 25 A there.',
+      ],
+    },
+    {
+      name: 'a run to a pump by the open switch beside the one that is closed',
+      given: aDesign()
+        .battery()
+        .fuse('F1', 25, {}, { mountedOn: { device: 'g1', terminal: 'pos' } })
+        .device('S1', 'switch', { continuousA: 40, role: 'float' })
+        .device('S2', 'switch', { continuousA: 40, role: 'branch', normal: 'open' })
+        .load('M1', 22)
+        .run('W1', 'F1.b', 'S1.a', 1, '10 AWG')
+        .run('W2', 'S1.b', 'M1.pos', 1, '10 AWG')
+        .run('W3', 'F1.b', 'S2.a', 0.5, '18 AWG', { enclosed: 'enclosure' })
+        .run('W4', 'S2.b', 'M1.pos', 1, '10 AWG')
+        .run('W5', 'M1.neg', 'G1.neg', 1, '10 AWG')
+        .build(),
+      says: ['W3 has to carry 22 A; 18 AWG carries 20 A there.'],
+      remedies: ['Use 16 AWG for W3'],
+    },
+    {
       name: '22 A on 16 AWG in the engine space',
       given: fusedRun(25, { size: '16 AWG', loadA: 22, engineSpace: true }),
       says: [

@@ -107,10 +107,28 @@ testRule(ratingAboveAmpacity, {
         .run('W3', 'X1.3', 'E1.pos', 1, '10 AWG')
         .run('W4', 'E1.neg', 'G1.neg', 1, '10 AWG')
         .build(),
-      says: ['W1', 'W2', 'W3'].map(
-        (run) =>
-          `F1 and F2 side by side pass 120 A before they open; ${run} carries 60 A, so no more than 60 A may stand ahead of it.`,
-      ),
+      says: [
+        'F1 and F2 side by side pass 120 A before they open; W3 carries 60 A, so no more than 60 A may stand ahead of it.',
+      ],
+      remedies: ['Use 6 AWG for W3'],
+    },
+    {
+      // 4 AWG carries 160 A; the next standard rating above it is 175 A.
+      name: 'a main fuse too large for its own feeder: one finding for the runs in a row, which are no tap',
+      given: aDesign()
+        .battery()
+        .fuse('F1', 250, { family: 'bolt-down' }, { mountedOn: { device: 'g1', terminal: 'pos' } })
+        .device('Q1', 'switch', { continuousA: 300, role: 'battery' })
+        .busbar('X1', 'dc+')
+        .fuse('F11', 10, {}, { mountedOn: { device: 'x1', terminal: '2' } })
+        .load('E1', 5)
+        .run('W1', 'F1.b', 'Q1.a', 0.5, '4 AWG')
+        .run('W2', 'Q1.b', 'X1.1', 3, '4 AWG')
+        .run('W3', 'F11.b', 'E1.pos', 1, '10 AWG')
+        .run('W4', 'E1.neg', 'G1.neg', 1, '10 AWG')
+        .build(),
+      says: ['F1 is rated 250 A; W1 carries 160 A, so no more than 175 A may stand ahead of it.'],
+      remedies: ['Use 175 A for F1', 'Use 1 AWG for W1 and W2'],
     },
   ],
 });

@@ -1,14 +1,15 @@
 import type { Remedy } from '#shared/model/analysis.ts';
-import { workOf } from '#shared/model/defaults.ts';
-import type { Device } from '#shared/model/design.ts';
+import { conductorOf, workOf } from '#shared/model/defaults.ts';
+import type { Device, EntityId } from '#shared/model/design.ts';
 import { compareMarks } from '#shared/rules/marks.ts';
-import { listOf, mayChange, useRating, useSize } from '#shared/rules/mending.ts';
+import { listOf, mayChange, useRating, useSizeFor } from '#shared/rules/mending.ts';
 import { defineRule } from '#shared/rules/rule.ts';
 import { leastRatingA } from '#shared/rules/protection-load.ts';
 import type { Proof, ProvedRun } from '#shared/solve/proof.ts';
 import { familyOf } from '#shared/solve/protection.ts';
 import { callOf } from '#shared/solve/ratings.ts';
 import { smallestByAmpacity } from '#shared/solve/sizes.ts';
+import { squareMmOf } from '#shared/tables/copper.ts';
 import { nextRatingDown } from '#shared/tables/protection.ts';
 
 /**
@@ -34,9 +35,9 @@ export const ratingAboveAmpacity = defineRule({
 
   *check(proof) {
     for (const run of proof.runs) {
-      for (const { device, beside = [], others = [], ratedA, allowedRatingA } of run.protection) {
+      for (const { device, beside = [], others = [], fedBy, ratedA, allowedRatingA } of run.protection) {
         if (!device || ratedA === undefined || allowedRatingA === undefined || run.ampacity.allowedA <= 0) continue;
-        if (ratedA <= allowedRatingA * (1 + 1e-9)) continue;
+        if (ratedA <= allowedRatingA * (1 + 1e-9) || isFoundEarlier(proof, run, fedBy)) continue;
         yield {
           subject: { run: run.id },
           figures: {
@@ -57,6 +58,40 @@ export const ratingAboveAmpacity = defineRule({
   },
 });
 
+/** Runs in a row of the same conductor, behind the same device, are one cause: it is said of the first. */
+function isFoundEarlier(proof: Proof, run: ProvedRun, fedBy: EntityId | undefined): boolean {
+  const before = fedBy === undefined ? undefined : proof.runOf.get(fedBy);
+  return before !== undefined && isSameConductor(before, run) && endAbove(before) !== undefined;
+}
+
+function isSameConductor(one: ProvedRun, other: ProvedRun): boolean {
+  return (
+    conductorOf(one.run).size === conductorOf(other.run).size &&
+    one.ampacity.allowedA === other.ampacity.allowedA &&
+    !one.isCranking
+  );
+}
+
+function endAbove(run: ProvedRun) {
+  if (run.ampacity.allowedA <= 0) return undefined;
+  return run.protection.find(
+    ({ ratedA, allowedRatingA }) =>
+      ratedA !== undefined && allowedRatingA !== undefined && ratedA > allowedRatingA * (1 + 1e-9),
+  );
+}
+
+/** The run, and those behind it that are found with it. */
+function rowFrom(proof: Proof, run: ProvedRun): ProvedRun[] {
+  const row = [run];
+  for (const head of row) {
+    for (const next of proof.runs) {
+      const { fedBy } = endAbove(next) ?? {};
+      if (fedBy === head.id && isSameConductor(head, next) && !row.includes(next)) row.push(next);
+    }
+  }
+  return row;
+}
+
 /** What is new is changed before what exists. */
 function remediesFor(
   proof: Proof,
@@ -70,9 +105,12 @@ function remediesFor(
   if (!isOneOfMany && fittingA !== undefined && fittingA >= leastRatingA(proof, device.id) && mayChange(device)) {
     ways.push({ isNew: workOf(device) === 'new', remedy: useRating(device, fittingA) });
   }
-  const size = run.recommendedSize ?? (run.isSignal ? null : smallestByAmpacity(run.sizing));
-  if (size !== null && mayChange(run.run)) {
-    ways.push({ isNew: workOf(run.run) === 'new', remedy: useSize(proof, run, size) });
+  const row = rowFrom(proof, run);
+  const sizes = row.map((each) => each.recommendedSize ?? (each.isSignal ? null : smallestByAmpacity(each.sizing)));
+  const told = sizes.filter((size) => size !== null);
+  if (told.length === row.length && row.every((each) => mayChange(each.run))) {
+    const size = told.reduce((a, b) => (squareMmOf(a) >= squareMmOf(b) ? a : b));
+    ways.push({ isNew: row.every((each) => workOf(each.run) === 'new'), remedy: useSizeFor(proof, row, size) });
   }
   return [...ways.filter((way) => way.isNew), ...ways.filter((way) => !way.isNew)].map((way) => way.remedy);
 }

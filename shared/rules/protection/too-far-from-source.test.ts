@@ -35,6 +35,23 @@ function tapAt(lengthM: number, runIs: Partial<Run> = {}) {
     .build();
 }
 
+/** A fuse at the end of a run from the switch on the way to a starter, 1 m of cable from the battery. */
+function crankingTapAt(lengthM: number, runIs: Partial<Run>, from: 'Q1.b' | 'G1.pos' = 'Q1.b') {
+  return aDesign()
+    .battery()
+    .device('Q1', 'switch', { continuousA: 300, role: 'battery' })
+    .device('M1', 'starter', { crankA: 200 })
+    .fuse('F1', 30)
+    .load('E1', 5)
+    .run('W1', 'G1.pos', 'Q1.a', 1, '2 AWG', bare)
+    .run('W2', 'Q1.b', 'M1.pos', 1, '2 AWG', bare)
+    .run('W3', 'M1.neg', 'G1.neg', 1, '2 AWG')
+    .run('W4', from, 'F1.a', lengthM, '10 AWG', runIs as object)
+    .run('W5', 'F1.b', 'E1.pos', 1, '10 AWG')
+    .run('W6', 'E1.neg', 'G1.neg', 1, '10 AWG')
+    .build();
+}
+
 const sheath = { enclosed: 'sheath' } as const;
 const bare = { enclosed: 'none' } as const;
 
@@ -44,6 +61,12 @@ testRule(tooFarFromSource, {
     { name: '7 in bare', given: fuseAt(7 * INCH, bare) },
     { name: '72 in from a battery in a sheath', given: fuseAt(72 * INCH, sheath) },
     { name: '40 in from a busbar in a sheath', given: tapAt(40 * INCH, sheath) },
+    { name: '7 in bare from a stud on the way to a starter', given: crankingTapAt(7 * INCH, bare) },
+    { name: '40 in in a sheath from a stud on the way to a starter', given: crankingTapAt(40 * INCH, sheath) },
+    {
+      name: '72 in in a sheath from the battery that a starter hangs on',
+      given: crankingTapAt(72 * INCH, sheath, 'G1.pos'),
+    },
     { name: '200 mm bare in the ISO profile', given: fuseAt(0.2, bare, { iso: true }) },
     { name: '1.8 m in a sheath in the ISO profile', given: fuseAt(1.8, sheath, { iso: true }) },
     { name: 'a length that nobody has told', given: fuseAt(0, { lengthM: undefined }) },
@@ -93,6 +116,24 @@ testRule(tooFarFromSource, {
       given: tapAt(41 * INCH, sheath),
       says: ['F2 stands 3 ft 5 in from F1 along W2; 3 ft 4 in is the most in a sheath or enclosure.'],
       remedies: [],
+    },
+    {
+      name: '7.1 in bare from a stud on the way to a starter, measured from that stud',
+      given: crankingTapAt(7.1 * INCH, bare),
+      says: ['F1 stands 7.1 in from Q1 along W4; 7 in is the most for a bare run.'],
+      remedies: ['Sheathe W4'],
+    },
+    {
+      name: '41 in in a sheath from a stud on the way to a starter',
+      given: crankingTapAt(41 * INCH, sheath),
+      says: ['F1 stands 3 ft 5 in from Q1 along W4; 3 ft 4 in is the most in a sheath or enclosure.'],
+      remedies: [],
+    },
+    {
+      name: '201 mm bare in the ISO profile, a hair past 200 mm: the two figures do not read the same',
+      given: fuseAt(0.201, bare, { iso: true }),
+      says: ['F1 stands 7.91 in from G1 along W1; 7.87 in is the most for a bare run.'],
+      remedies: ['Sheathe W1'],
     },
     {
       name: '0.21 m bare in the ISO profile',

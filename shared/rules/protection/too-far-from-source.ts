@@ -11,6 +11,9 @@ import { coveringOf } from '#shared/solve/regions.ts';
  * The first fuse or breaker stands close to the source of the current: within 7 in along the conductors, or within
  * 72 in of a battery and 40 in of any other source where all of the way is in a sheath, conduit or enclosure.
  *
+ * The cables between a battery and a starter are exempt; what leaves them is measured from the stud where it leaves
+ * (183.455(b): at the source of power of each conductor), as from any source that is no battery terminal.
+ *
  * Why: nothing protects the stub before the device. The way is summed from the terminal of the source through
  * switches, selectors and studs. Where nobody has told whether a run is enclosed it should be told, not passed.
  * Source: ABYC E-11 and 33 CFR 183.455(b); ISO 13297:2020 12.3 and, from memory, ISO 10133:2012 8.1.

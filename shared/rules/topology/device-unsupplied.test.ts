@@ -5,9 +5,16 @@ import { deviceUnsupplied } from './device-unsupplied.ts';
 
 const iso = { profile: 'iso-13297' } as const;
 
-/** A panel whose busbar the feed never reaches. */
+/** A panel whose busbar the feed never reaches; the battery feeds something else. */
 function deadPanel(loads: readonly string[]) {
-  const design = aDesign().battery().busbar('X1', 'dc+').busbar('X2', 'dc-').run('W1', 'X2.1', 'G1.neg', 1, '10 AWG');
+  const design = aDesign()
+    .battery()
+    .busbar('X1', 'dc+')
+    .busbar('X2', 'dc-')
+    .load('E99', 1)
+    .run('W1', 'X2.1', 'G1.neg', 1, '10 AWG')
+    .run('W98', 'G1.pos', 'E99.pos', 1, '10 AWG')
+    .run('W99', 'E99.neg', 'G1.neg', 1, '10 AWG');
   loads.forEach((load, i) => {
     design
       .load(load, 1)
@@ -31,6 +38,18 @@ testRule(deviceUnsupplied, {
         .run('W1', 'F1.b', 'S1.a', 1, '10 AWG')
         .run('W2', 'S1.b', 'P1.pos', 1, '10 AWG')
         .run('W3', 'P1.neg', 'G1.neg', 1, '10 AWG')
+        .build(),
+    },
+    {
+      name: 'loads on the only battery, whose negative is open, which another rule says',
+      given: aDesign()
+        .battery()
+        .fuse('F1', 10, {}, { mountedOn: { device: 'g1', terminal: 'pos' } })
+        .load('E1', 5)
+        .load('E2', 5)
+        .run('W1', 'F1.b', 'E1.pos', 1, '10 AWG')
+        .run('W2', 'E1.pos', 'E2.pos', 1, '10 AWG')
+        .run('W3', 'E1.neg', 'E2.neg', 1, '10 AWG')
         .build(),
     },
     { name: 'a load with an open terminal, which another rule says', given: aDesign().battery().load('E1', 5).build() },

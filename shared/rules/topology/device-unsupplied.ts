@@ -58,9 +58,12 @@ function causeOf({ circuits }: Proof, { edge, device }: LoadDemand): string {
   return dead && circuits.netOf(edge.a) !== circuits.netOf(edge.b) ? `net ${dead.index}` : device.id;
 }
 
-/** A fuse or switch with an open end on the dead net: that is the reason, and it is said there. */
+/** A fuse or switch with an open end on the dead net, or one on every source about: that is the reason, and is said there. */
 function deadNetHasOpening({ circuits }: Proof, { edge }: LoadDemand, open: ReadonlySet<string>): boolean {
-  const dead = new Set([circuits.netOf(edge.a), circuits.netOf(edge.b)].filter((net) => net.side === 'dead'));
+  const nets = [circuits.netOf(edge.a), circuits.netOf(edge.b)];
+  const dead = new Set(nets.filter((net) => net.side === 'dead'));
+  const sources = nets.flatMap(({ positives, negatives }) => [...positives, ...negatives]);
+  if (dead.size === 1 && sources.length > 0 && sources.every(({ device }) => open.has(device.id))) return true;
   return circuits.network.edges.some(
     (each) => each.type === 'contact' && dead.has(circuits.netOf(each.a)) && open.has(each.device.id),
   );
