@@ -12,7 +12,7 @@ import { ownModes, proveDesign, type Proof, type ProvedRun } from '#shared/solve
 import { readable } from './readable.ts';
 import { compareNaturally, compareText } from './marks.ts';
 import { withoutHarm } from './harmless.ts';
-import { applyRule } from './rule.ts';
+import { applyRule, type Rule } from './rule.ts';
 import { RULES } from './index.ts';
 
 /** Whoever lists the parts; the lists stand above the engine, so they are handed in. */
@@ -33,17 +33,18 @@ export function analyse(given: Design, catalogue: Catalogue = {}): Analysis {
     faults: proof.faults,
     energy: energyOf(proof),
     parts: catalogue.partsOf?.(design) ?? [],
-    findings: withoutHarm(findingsOf(proof), proof, findingsOf),
+    findings: withoutHarm(findingsOf(proof), proof, (mended) => findingsOf(mended)),
   };
 }
 
 const SEVERITIES = ['must', 'should', 'note'] as const;
 
 /** In the order of severity, rule, mark and id, whatever the order of keys in the document. */
-export function findingsOf(proof: Proof): Finding[] {
+export function findingsOf(proof: Proof, rules: readonly Rule[] = RULES): Finding[] {
   const rank = new Map(RULES.map((rule, index) => [rule.id, index]));
   const { accepted } = proof.design;
-  return RULES.flatMap((rule) => applyRule(rule, proof))
+  return rules
+    .flatMap((rule) => applyRule(rule, proof))
     .map((finding) =>
       accepted && Object.hasOwn(accepted, finding.id) ? { ...finding, accepted: true as const } : finding,
     )

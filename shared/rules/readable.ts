@@ -1,6 +1,6 @@
 import type { z } from 'zod';
 
-import { Basis, WORK, type Design, type Device, type Run } from '#shared/model/design.ts';
+import { Basis, WORK, Zone, type Design, type Device, type Run } from '#shared/model/design.ts';
 import { INSULATION_TEMPERATURES, sizeOf } from '#shared/model/size.ts';
 
 /**
@@ -16,7 +16,7 @@ export function readable(design: Design): Design {
     version: 1,
     basis: isRecord(given.basis) ? readableBasis(given.basis) : {},
     sheets: only(given.sheets, isRecord),
-    zones: mapped(only(given.zones, isRecord), withFiniteNumbers),
+    zones: mapped(only(given.zones, isRecord), readableZone),
     devices,
     runs: mapped(only(given.runs, isRun), tidyRun),
     modes: mapped(only(given.modes, isRecord), withHours),
@@ -117,10 +117,11 @@ function isInsulation(value: unknown): boolean {
   return value === undefined || INSULATION_TEMPERATURES.some((known) => known === value);
 }
 
-/** A number that is none falls back to its default. */
-function withFiniteNumbers<T extends object>(entity: T): T {
-  const broken = Object.entries(entity).filter(([, value]) => typeof value === 'number' && !Number.isFinite(value));
-  if (broken.length === 0) return entity;
-  const names = new Set(broken.map(([name]) => name));
-  return Object.fromEntries(Object.entries(entity).filter(([name]) => !names.has(name))) as T;
+/** Each part of a zone by its own schema; what does not fit falls back to its default. */
+function readableZone<T extends object>(zone: T): T {
+  const shape = Zone.shape as Record<string, z.ZodType>;
+  const isSound = ([key, value]: [string, unknown]) =>
+    !Object.hasOwn(shape, key) || shape[key]!.safeParse(value).success;
+  const entries = Object.entries(zone);
+  return entries.every(isSound) ? zone : (Object.fromEntries(entries.filter(isSound)) as T);
 }

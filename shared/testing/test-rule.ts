@@ -3,8 +3,10 @@ import { describe, expect, it } from 'vitest';
 import type { Finding } from '#shared/model/analysis.ts';
 import type { Design } from '#shared/model/design.ts';
 import { applyPatches } from '#shared/model/patch.ts';
-import { analyse } from '#shared/rules/analyse.ts';
+import { analyse, findingsOf } from '#shared/rules/analyse.ts';
+import { readable } from '#shared/rules/readable.ts';
 import type { Rule } from '#shared/rules/rule.ts';
+import { proveDesign } from '#shared/solve/proof.ts';
 
 export interface RightCase {
   readonly name: string;
@@ -22,7 +24,7 @@ export interface WrongCase extends RightCase {
 
 /**
  * Holds a rule to its table of cases, and each remedy to its word: applied, the finding is gone and no must-fix is
- * new. A rule that says nothing any more fails every wrong case.
+ * new. A rule that says nothing any more fails every wrong case, and that is tried.
  */
 export function testRule(rule: Rule, cases: { right: readonly RightCase[]; wrong: readonly WrongCase[] }): void {
   describe(rule.id, () => {
@@ -36,6 +38,10 @@ export function testRule(rule: Rule, cases: { right: readonly RightCase[]; wrong
     for (const wrong of cases.wrong) {
       it(`says of ${wrong.name}`, () => holdToCase(rule, wrong));
     }
+    it('fails each wrong case once its check says nothing', () => {
+      const silent: Rule = { ...rule, check: () => [] };
+      for (const wrong of cases.wrong) expect(() => holdToCase(silent, wrong), wrong.name).toThrow();
+    });
   });
 }
 
@@ -77,5 +83,5 @@ export function mustFix(design: Design): string[] {
 }
 
 function saidBy(rule: Rule, design: Design): Finding[] {
-  return analyse(design).findings.filter((finding) => finding.rule === rule.id);
+  return findingsOf(proveDesign(readable(design)), [rule]);
 }

@@ -56,7 +56,7 @@ export function readLengthM(text: string, units: UnitSystem): number | undefined
  * more decimals as are asked for: `7.91 in`, `6 ft 0.3 in`, `1.804 m`.
  */
 export function formatLength(lengthM: number, units: UnitSystem, finer = 0): string {
-  if (!Number.isFinite(lengthM)) return 'unknown';
+  if (!Number.isFinite((lengthM / INCH) * 1e4)) return 'unknown';
   return units === 'us' ? formatFeet(Math.max(0, lengthM), finer) : formatMetres(Math.max(0, lengthM), finer);
 }
 

@@ -47,7 +47,7 @@ export const ratingUnknown = defineRule({
 
 /** What no figure of a device can be worked out without. A load says its amperes or its watts. */
 function neededRatings({ kind, ratings }: Device): readonly (readonly [name: string, what: string])[] {
-  if (kind !== 'load') return NEEDED[kind] ?? [];
+  if (kind !== 'load') return Object.hasOwn(NEEDED, kind) ? NEEDED[kind]! : [];
   return [
     ['nominalV', 'its voltage'],
     ratings.ratedA === undefined && ratings.ratedW !== undefined
